@@ -1,0 +1,1 @@
+"""Plain formulas of pumps and liquids: floats in, floats out, each with its source."""

@@ -1,0 +1,119 @@
+"""Limits: thresholds with their origin. Every comparison of a figure with a limit is made here.
+
+The fields of `Limits` are the register of limit names; `bidcheck/limit_sets/*.toml` give their values, an inquiry may
+override any of them.
+"""
+
+from dataclasses import dataclass, field, fields
+from typing import Literal
+
+from bidcheck.quantity import Kind
+
+Mark = Literal["text", "crossed", "memory", "practice", "derived", "purchaser"]
+"""How a value is known: read in the text named, recalled and reproduced, recalled only, common practice of the
+trade, following from other formulas, or set by the purchaser in the inquiry."""
+
+HAIR = 1e-9
+"""Relative slack of every comparison, so that a figure exactly at its limit passes in any unit."""
+
+
+@dataclass(frozen=True, slots=True)
+class Limit:
+    """A threshold: at least, at most, or both; where it comes from; whether it is mandatory."""
+
+    name: str
+    kind: Kind
+    at_least: float | None
+    at_most: float | None
+    origin: str
+    mark: Mark
+    mandatory: bool = False
+    missed: Literal["remark", "query"] | None = None
+    """Verdict when the limit is missed, where it differs from the check's own; a mandatory limit missed is a fail."""
+
+    def __post_init__(self) -> None:
+        if self.at_least is None and self.at_most is None:
+            raise ValueError(f"limit {self.name} needs at_least or at_most")
+        if self.at_least is not None and self.at_most is not None and self.at_least > self.at_most:
+            raise ValueError(f"limit {self.name} has at_least above at_most")
+
+
+@dataclass(frozen=True, slots=True)
+class Comparison:
+    """A figure held against a limit."""
+
+    value: float
+    limit: Limit
+    holds: bool
+
+
+def within(value: float, limit: Limit, slack: float = 0.0) -> Comparison:
+    """Compare `value` with `limit`; exactly at the limit holds.
+
+    Parameters
+    ----------
+    value, slack : float
+        Figure and the doubt it carries, both in SI of the limit's kind. The figure must miss the limit by more
+        than `slack` for the comparison not to hold.
+    """
+    low, high = limit.at_least, limit.at_most
+    holds = (low is None or value + slack >= low - HAIR * abs(low)) and (
+        high is None or value - slack <= high + HAIR * abs(high)
+    )
+    return Comparison(value, limit, holds)
+
+
+def named(kind: Kind, meaning: str) -> Limit:
+    """Declare a limit name of the register: its kind and one line on what it limits."""
+    return field(metadata={"kind": kind, "meaning": meaning})  # type: ignore[no-any-return]
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Limits:
+    """The set of limits in force."""
+
+    set_name: str
+    curve_points: Limit = named(Kind.COUNT, "points of each column of a curve")
+    curve_reach: Limit = named(Kind.WHOLE_SHARE, "last flow with points over the largest flow asked for")
+    curve_beyond_bep: Limit = named(Kind.WHOLE_SHARE, "last flow with points over best efficiency flow")
+    odd_point: Limit = named(Kind.SHARE, "distance of a point from its own curve over the curve's largest value")
+    power_balance: Limit = named(
+        Kind.SHARE, "disagreement of stated efficiency with flow, head and power that no single mistake explains"
+    )
+    claim_on_curve: Limit = named(Kind.SHARE, "claim against the fitted curve, beyond printed digits and fit")
+    declared_bep: Limit = named(Kind.WHOLE_SHARE, "declared best efficiency flow against that of the fitted points")
+    duty_head: Limit = named(Kind.SHARE, "head at rated flow over rated head")
+    duty_head_floor: Limit = named(Kind.SHARE, "head at rated flow over rated head, below which the duty is not met")
+    rated_over_bep: Limit = named(Kind.WHOLE_SHARE, "rated flow over best efficiency flow, at the diameter offered")
+    npsh_margin: Limit = named(Kind.NPSH, "NPSH available less NPSH3")
+    npsh_ratio: Limit = named(Kind.RATIO, "NPSH available over NPSH3")
+    npsh_margin_raised: Limit = named(
+        Kind.NPSH, "NPSH available less NPSH3 where suction specific speed is above `nss_ordinary`"
+    )
+    npsh_ratio_raised: Limit = named(
+        Kind.RATIO, "NPSH available over NPSH3 where suction specific speed is above `nss_ordinary`"
+    )
+    npsh_floor: Limit = named(
+        Kind.NPSH, "NPSH available less NPSH3, below which the pump cavitates beyond 3 % head loss"
+    )
+    nss_ordinary: Limit = named(
+        Kind.SUCTION_SPECIFIC_SPEED, "suction specific speed up to which the ordinary NPSH margin holds"
+    )
+    suction_specific_speed: Limit = named(
+        Kind.SUCTION_SPECIFIC_SPEED, "suction specific speed at best efficiency, maximum diameter"
+    )
+    suction_specific_speed_high: Limit = named(Kind.SUCTION_SPECIFIC_SPEED, "suction specific speed without an inducer")
+    shutoff_droop: Limit = named(Kind.SHARE, "fall of the head curve towards shutoff over shutoff head")
+
+    def all(self) -> tuple[Limit, ...]:
+        """Every limit in force, in the order of the register."""
+        return tuple(getattr(self, item.name) for item in fields(self) if item.name != "set_name")
+
+
+def limit_names() -> dict[str, tuple[Kind, str]]:
+    """Register of limit names: name → (kind, meaning)."""
+    return {
+        item.name: (item.metadata["kind"], item.metadata["meaning"])
+        for item in fields(Limits)
+        if item.name != "set_name"
+    }

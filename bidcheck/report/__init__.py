@@ -1,0 +1,1 @@
+"""From an evaluation to text: terminal, JSON, HTML page, figures."""
