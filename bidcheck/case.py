@@ -4,7 +4,7 @@ from collections.abc import Mapping
 from dataclasses import dataclass
 
 from bidcheck.bid import Bid
-from bidcheck.curve import Curve, Fits
+from bidcheck.curve import Column, Curve, Fits
 from bidcheck.inquiry import Inquiry
 from bidcheck.quantity import Assumption
 
@@ -99,6 +99,8 @@ class AtFlow:
     npsh3: float | None
     npsha: float | None
     flow_over_bep: float | None
+    from_claims: tuple[Column, ...] = ()
+    """Figures taken from the bidder's claims because the curve does not reach this flow."""
 
     @property
     def npsh_margin(self) -> float | None:
@@ -112,10 +114,10 @@ class AtFlow:
 class Case:
     """One bid prepared for the checks.
 
-    `curve` holds the points of the rated diameter at the offered speed and stages, in water; `fits` is fitted through
-    them. `pumped` is the same for the liquid, density and viscosity of the inquiry. `max_curve`, `max_fits` belong to the
-    maximum diameter where the bid gives a curve of it, else they are those of the rated diameter. None where the bid gives
-    no curve of the rated diameter.
+    `curve` holds the points of the rated diameter at the offered speed and stages, in water; `fits` is fitted
+    through them. `pumped` is the same for the liquid, density and viscosity of the inquiry. `max_curve` and
+    `max_fits` belong to the maximum diameter where the bid gives a curve of it, else they are those of the rated
+    diameter. None where the bid gives no such curve.
     """
 
     inquiry: Inquiry
@@ -129,5 +131,7 @@ class Case:
     at_duty: AtFlow
     operating: tuple[tuple[str, AtFlow], ...]
     """Flows the pump must serve, with their names: "rated", "smallest flow", "normal flow", "largest flow"."""
+    water: str
+    """Why there is no curve in water to judge efficiency and specific speed by; empty where there is one."""
     others: tuple[Bid, ...]
     assumptions: tuple[Assumption, ...]

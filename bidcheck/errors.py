@@ -42,9 +42,9 @@ class UnitError(BidcheckError):
     """A quantity whose unit is missing, unknown or of the wrong kind; the text names the cure."""
 
 
-class NotSupplied(BidcheckError):
+class NotSupplied(BidcheckError):  # noqa: N818
     """A figure that is needed and was not given."""
 
 
-class OutOfRange(BidcheckError):
+class OutOfRange(BidcheckError):  # noqa: N818
     """A formula asked outside the range it is valid for, or a curve outside its points."""

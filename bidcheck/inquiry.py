@@ -1,4 +1,4 @@
-"""The purchaser's inquiry as read: one duty, its liquid and site, the limits in force, and the bids received. SI inside."""
+"""The purchaser's inquiry as read: one duty, its liquid and site, the limits in force, the bids received. SI inside."""
 
 from dataclasses import dataclass
 
@@ -25,7 +25,7 @@ class Duty:
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Liquid:
-    """The liquid as pumped. Temperature [K], density [kg/m³], viscosity kinematic [m²/s], vapour pressure absolute [Pa]."""
+    """The liquid as pumped: temperature [K], density [kg/m³], kinematic viscosity [m²/s], vapour pressure [Pa abs]."""
 
     name: str
     density: float
@@ -37,7 +37,7 @@ class Liquid:
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Suction:
-    """Suction side of one pump: absolute pressure on the liquid [Pa], level above pump datum [m], loss at rated flow [m]."""
+    """Suction side of one pump: pressure on the liquid [Pa absolute], level above datum [m], loss at rated flow [m]."""
 
     pressure: float
     liquid_level: float

@@ -1,0 +1,94 @@
+"""Put a supplied curve on one basis: offered speed, all stages, shaft power, the liquid of the inquiry."""
+
+from dataclasses import replace
+
+from bidcheck.bid import Bid
+from bidcheck.curve import Curve, Fits, Floats, Points
+from bidcheck.hydraulics.viscous import performance_factor, viscous_performance
+from bidcheck.inquiry import Liquid
+from bidcheck.quantity import Assumption
+
+NPSH3_UP, NPSH3_DOWN = 2.0, 1.3
+"""Exponents of speed for NPSH3, the careful one either way. Source: ISO 9906:2012 lets 1.3 to 2 (from memory)."""
+
+
+def scaled(points: Points | None, flow: float = 1.0, value: float = 1.0) -> Points | None:
+    """Points with flow and value multiplied, printed digits along with them."""
+    if points is None:
+        return None
+    return Points(
+        flow=points.flow * flow,
+        value=points.value * value,
+        flow_half_digit=points.flow_half_digit * flow,
+        value_half_digit=points.value_half_digit * value,
+        line=points.line,
+    )
+
+
+def at_offered_basis(curve: Curve, bid: Bid, assumptions: list[Assumption]) -> Curve:
+    """Bring a curve to the offered speed, to all stages, and to shaft power.
+
+    Parameters
+    ----------
+    curve : Curve
+    bid : Bid
+    assumptions : list of Assumption
+        What had to be assumed is appended here.
+
+    Notes
+    -----
+    Q n, H n², P n³ and NPSH3 n² upwards, n^1.3 downwards. Head given for fewer stages grows in proportion. Power given
+    as motor input is multiplied by the efficiency of the motor offered; without one it is left out.
+    Source: affinity laws.
+    """
+    ratio = bid.speed_rpm / curve.speed_rpm
+    exponent = NPSH3_UP if ratio > 1.0 else NPSH3_DOWN
+    if abs(ratio - 1.0) > 1e-9:
+        words = f"from {curve.speed_rpm:.0f} to {bid.speed_rpm:.0f} 1/min by the affinity laws"
+        why = f"NPSH3 with exponent {exponent:g}, the careful one of the range 1.3 to 2"
+        assumptions.append(Assumption(f"{curve.file}: brought to the offered speed", words, why))
+    power, shaft = curve.power, 1.0
+    if curve.power_at == "motor input" and power is not None:
+        if bid.driver.efficiency is None:
+            power = None
+            why = "power is motor input and the bid names no motor efficiency"
+            assumptions.append(Assumption(f"{curve.file}: shaft power", "left out", why))
+        else:
+            shaft = bid.driver.efficiency
+            words = f"motor input × {100 * shaft:.1f} %"
+            why = "efficiency of the motor offered, taken as constant over load"
+            assumptions.append(Assumption(f"{curve.file}: shaft power", words, why))
+    return replace(
+        curve,
+        speed_rpm=bid.speed_rpm,
+        stages=bid.stages,
+        power_at="shaft",
+        head=scaled(curve.head, ratio, ratio**2 * bid.stages / curve.stages),
+        efficiency=scaled(curve.efficiency, ratio),
+        power=scaled(power, ratio, ratio**3 * shaft),
+        npsh3=scaled(curve.npsh3, ratio, ratio**exponent),
+    )
+
+
+def viscosity_matters(liquid: Liquid, bid: Bid, fits: Fits) -> bool:
+    """Whether viscosity changes what the pump does: parameter B of ANSI/HI 9.6.7 above 1 at best efficiency."""
+    bep = fits.bep
+    if bep is None or bep.head is None or bep.head <= 0:
+        return False
+    return bool(performance_factor(liquid.viscosity, bep.head / bid.stages, bep.flow, bid.speed_rpm) > 1.0)
+
+
+def as_pumped(
+    curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumptions: list[Assumption]
+) -> Curve | None:
+    """The curve for the liquid of the inquiry, or None where that cannot be said.
+
+    Power goes with density. A water curve of a viscous liquid is corrected by ANSI/HI 9.6.7 inside its limits; outside
+    them nothing is known as pumped.
+    """
+    density = liquid.density / curve.density
+    if curve.liquid == "water" and viscosity_matters(liquid, bid, fits):
+        return _corrected_for_viscosity(curve, fits, liquid, bid, assumptions)
+    if abs(density - 1.0) < 1e-12:
+        return curve
+    return replace(curve, density=liquid.density, power=scaled(curve.power, 1.0, density))

@@ -1,0 +1,64 @@
+"""Short names for evidence of each kind. Values in SI; shares and efficiencies as fractions."""
+
+from bidcheck.finding import Evidence
+from bidcheck.quantity import Kind
+
+
+def flow(value: float) -> Evidence:
+    """Flow [m³/s]."""
+    return Evidence(value, Kind.FLOW)
+
+
+def head(value: float) -> Evidence:
+    """Head [m]."""
+    return Evidence(value, Kind.HEAD)
+
+
+def npsh(value: float) -> Evidence:
+    """NPSH [m]."""
+    return Evidence(value, Kind.NPSH)
+
+
+def power(value: float) -> Evidence:
+    """Power [W]."""
+    return Evidence(value, Kind.POWER)
+
+
+def share(value: float) -> Evidence:
+    """Efficiency or ratio [fraction], printed in per cent with a decimal."""
+    return Evidence(value, Kind.SHARE)
+
+
+def whole_share(value: float) -> Evidence:
+    """Ratio [fraction], printed in whole per cent."""
+    return Evidence(value, Kind.WHOLE_SHARE)
+
+
+def points(value: float) -> Evidence:
+    """Difference of efficiencies [fraction], printed in points."""
+    return Evidence(value, Kind.POINTS)
+
+
+def ratio(value: float) -> Evidence:
+    """Bare ratio."""
+    return Evidence(value, Kind.RATIO)
+
+
+def count(value: int) -> Evidence:
+    """Number of things."""
+    return Evidence(float(value), Kind.COUNT)
+
+
+def specific_speed(value: float) -> Evidence:
+    """Specific speed nq."""
+    return Evidence(value, Kind.SPECIFIC_SPEED)
+
+
+def suction_specific_speed(value: float) -> Evidence:
+    """Suction specific speed, metric."""
+    return Evidence(value, Kind.SUCTION_SPECIFIC_SPEED)
+
+
+def text(value: str) -> Evidence:
+    """Words."""
+    return Evidence(value, Kind.TEXT)
