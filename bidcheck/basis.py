@@ -3,8 +3,9 @@
 from dataclasses import replace
 
 from bidcheck.bid import Bid
-from bidcheck.curve import Curve, Fits, Floats, Points
-from bidcheck.hydraulics.viscous import performance_factor, viscous_performance
+from bidcheck.curve import Curve, Fit, Fits, Points
+from bidcheck.fit import fit_curve
+from bidcheck.hydraulics.viscous import performance_factor
 from bidcheck.inquiry import Liquid
 from bidcheck.quantity import Assumption
 
@@ -78,17 +79,27 @@ def viscosity_matters(liquid: Liquid, bid: Bid, fits: Fits) -> bool:
     return bool(performance_factor(liquid.viscosity, bep.head / bid.stages, bep.flow, bid.speed_rpm) > 1.0)
 
 
-def as_pumped(
-    curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumptions: list[Assumption]
-) -> Curve | None:
-    """The curve for the liquid of the inquiry, or None where that cannot be said.
+def as_pumped(curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumptions: list[Assumption]) -> Fits | None:
+    """Fits for the liquid of the inquiry, or None where that cannot be said.
 
     Power goes with density. A water curve of a viscous liquid is corrected by ANSI/HI 9.6.7 inside its limits; outside
     them nothing is known as pumped.
     """
-    density = liquid.density / curve.density
     if curve.liquid == "water" and viscosity_matters(liquid, bid, fits):
-        return _corrected_for_viscosity(curve, fits, liquid, bid, assumptions)
-    if abs(density - 1.0) < 1e-12:
-        return curve
-    return replace(curve, density=liquid.density, power=scaled(curve.power, 1.0, density))
+        corrected = _corrected_for_viscosity(curve, fits, liquid, bid, assumptions)
+        return fit_curve(corrected) if corrected is not None else None
+    if fits.power is None:
+        return fits
+    return replace(fits, power=_scaled_fit(fits.power, liquid.density / curve.density))
+
+
+def _scaled_fit(fit: Fit, factor: float) -> Fit:
+    """A fit whose values are multiplied; nothing is fitted anew."""
+    return replace(
+        fit,
+        polynomial=fit.polynomial * factor,
+        rms=fit.rms * factor,
+        largest_residual=fit.largest_residual * factor,
+        covariance=fit.covariance * factor**2,
+        guard_difference=None if fit.guard_difference is None else fit.guard_difference * factor,
+    )

@@ -9,9 +9,9 @@ from typing import Literal
 
 from bidcheck.quantity import Kind
 
-Mark = Literal["text", "crossed", "memory", "practice", "derived", "purchaser"]
+Mark = Literal["text", "crossed", "memory", "practice", "derived", "purchaser", "bidder"]
 """How a value is known: read in the text named, recalled and reproduced, recalled only, common practice of the
-trade, following from other formulas, or set by the purchaser in the inquiry."""
+trade, following from other formulas, set by the purchaser in the inquiry, or stated by the bidder."""
 
 HAIR = 1e-9
 """Relative slack of every comparison, so that a figure exactly at its limit passes in any unit."""
@@ -80,8 +80,12 @@ class Limits:
     power_balance: Limit = named(
         Kind.SHARE, "disagreement of stated efficiency with flow, head and power that no single mistake explains"
     )
+    power_balance_scatter: Limit = named(
+        Kind.SHARE, "disagreement of stated efficiency with flow, head and power that is only remarked on"
+    )
     claim_on_curve: Limit = named(Kind.SHARE, "claim against the fitted curve, beyond printed digits and fit")
     declared_bep: Limit = named(Kind.WHOLE_SHARE, "declared best efficiency flow against that of the fitted points")
+    declared_bep_efficiency: Limit = named(Kind.POINTS, "declared best efficiency against that of the fitted points")
     duty_head: Limit = named(Kind.SHARE, "head at rated flow over rated head")
     duty_head_floor: Limit = named(Kind.SHARE, "head at rated flow over rated head, below which the duty is not met")
     rated_over_bep: Limit = named(Kind.WHOLE_SHARE, "rated flow over best efficiency flow, at the diameter offered")
@@ -92,6 +96,9 @@ class Limits:
     )
     npsh_ratio_raised: Limit = named(
         Kind.RATIO, "NPSH available over NPSH3 where suction specific speed is above `nss_ordinary`"
+    )
+    npsh_ordinary_region: Limit = named(
+        Kind.WHOLE_SHARE, "flow over best efficiency flow inside which the ordinary NPSH margin always suffices"
     )
     npsh_floor: Limit = named(
         Kind.NPSH, "NPSH available less NPSH3, below which the pump cavitates beyond 3 % head loss"

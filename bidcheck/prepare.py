@@ -43,10 +43,7 @@ def prepare(inquiry: Inquiry, bid: Bid) -> Case:
     flow = inquiry.duty.rated_flow
     fits = fit_curve(curve, check_flow=flow) if curve else None
     max_fits = fit_curve(max_curve) if max_curve and max_curve is not curve else fits
-    pumped_curve = as_pumped(curve, fits, inquiry.liquid, bid, assumptions) if curve and fits else None
-    pumped = fit_curve(pumped_curve, check_flow=flow) if pumped_curve and pumped_curve is not curve else None
-    if pumped_curve is not None and pumped_curve is curve:
-        pumped = fits
+    pumped = as_pumped(curve, fits, inquiry.liquid, bid, assumptions) if curve and fits else None
     water = _why_no_water_curve(inquiry, bid, max_curve, max_fits)
     return Case(
         inquiry=inquiry,

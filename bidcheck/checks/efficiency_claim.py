@@ -1,0 +1,156 @@
+"""Claimed best efficiency is plausible for a pump of this size and specific speed.
+
+The efficiency of the bidder's curve at best efficiency is held against estimates that do not come from the bidder: the middle
+of the surveyed market of its class, and what a published chart calls practically attainable. A claim above the attainable
+asks for a test; one far above it is called implausible. A low claim is poor for its class or stated on another basis. No such
+estimate can show an overstatement of 3 points; 5 seldom, 8 mostly, 10 nearly always.
+"""
+
+from collections.abc import Iterator
+
+from bidcheck.case import Case, EfficiencyEstimate
+from bidcheck.checks.evidence import points, share, specific_speed, text
+from bidcheck.checks.request import asked, not_applicable
+from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
+from bidcheck.limits import Limit, Mark, within
+from bidcheck.quantity import Kind
+
+CHART = "Hydraulic Institute chart of attainable efficiency, clean cold water"
+
+
+def run(case: Case) -> Iterator[Measured]:
+    """Place the efficiency at best efficiency among the independent estimates."""
+    estimate, claim = case.estimates.efficiency, case.estimates.offered_efficiency
+    if case.water and case.curve is not None:
+        yield asked("best efficiency", "water curve")
+    elif estimate is None or claim is None:
+        yield asked("best efficiency", "best efficiency")
+    elif estimate.reason:
+        yield not_applicable("best efficiency", estimate.reason)
+    else:
+        yield _placed(case, estimate, claim)
+
+
+def _limit(name: str, at_least: float | None, at_most: float | None, origin: str, mark: Mark) -> Limit:
+    return Limit(name, Kind.SHARE, at_least, at_most, origin, mark)
+
+
+def _placed(case: Case, estimate: EfficiencyEstimate, claim: float) -> Measured:
+    """The first step of the ladder that the claim stands on, from the top."""
+    high = _above(estimate, claim)
+    step = high if high is not None else _below(estimate, claim)
+    wording, verdict, limit = step if step is not None else ("", Verdict.PASS, _band(estimate))
+    return Measured(
+        subject="best efficiency",
+        verdict=verdict,
+        limit=limit,
+        evidence=_evidence(case, estimate, claim),
+        wording=wording,
+    )
+
+
+def _band(estimate: EfficiencyEstimate) -> Limit | None:
+    """The band in which nothing is said."""
+    low = estimate.remark_below
+    tops = [value for value in (estimate.remark_above, estimate.attainable) if value is not None]
+    high = min(tops) if tops else None
+    if low is None and high is None:
+        return None
+    if low is not None and high is not None and low > high:
+        low = None
+    return _limit("efficiency_band", low, high, estimate.expected_from or CHART, "derived")
+
+
+def _above(estimate: EfficiencyEstimate, claim: float) -> tuple[str, Verdict, Limit] | None:
+    """Steps above the expected value."""
+    top, attainable, remark = estimate.implausible_above, estimate.attainable, estimate.remark_above
+    if top is not None:
+        origin = f"a quarter of the losses left above the {CHART}"
+        limit = _limit("efficiency_implausible", None, top, origin, "derived")
+        if not within(claim, limit).holds:
+            return "implausible", Verdict.QUERY, limit
+    if attainable is not None:
+        limit = _limit("efficiency_attainable", None, attainable, CHART, "text")
+        if not within(claim, limit).holds:
+            return "above attainable", Verdict.QUERY, limit
+    if remark is not None:
+        origin = "1.64 times the error of the estimate above the expected value"
+        limit = _limit("efficiency_high", None, remark, origin, "derived")
+        if not within(claim, limit).holds:
+            return "high", Verdict.REMARK, limit
+    return None
+
+
+def _below(estimate: EfficiencyEstimate, claim: float) -> tuple[str, Verdict, Limit] | None:
+    """Steps below the expected value."""
+    if estimate.query_below is not None:
+        origin = "two spreads of the surveyed market below its middle"
+        limit = _limit("efficiency_very_low", estimate.query_below, None, origin, "derived")
+        if not within(claim, limit).holds:
+            verdict = Verdict.REMARK if estimate.lenient_low else Verdict.QUERY
+            return "very low", verdict, limit
+    if estimate.remark_below is not None:
+        origin = "1.28 spreads of the surveyed market below its middle, about the worst tenth"
+        limit = _limit("efficiency_low", estimate.remark_below, None, origin, "derived")
+        if not within(claim, limit).holds:
+            return "low", Verdict.REMARK, limit
+    return None
+
+
+def _evidence(case: Case, estimate: EfficiencyEstimate, claim: float) -> dict[str, Evidence]:
+    """The whole picture: claim, expected, attainable, distance, place in the market, specific speed."""
+    found: dict[str, Evidence] = {"claim": share(claim)}
+    if case.estimates.nq is not None:
+        found["nq"] = specific_speed(case.estimates.nq)
+    if estimate.expected is not None:
+        found["expected"] = share(estimate.expected)
+        found["above_expected"] = points(abs(claim - estimate.expected))
+        found["compared"] = text(
+            f"{100 * abs(claim - estimate.expected):.1f} points"
+            f" {'above' if claim >= estimate.expected else 'below'} the expected {100 * estimate.expected:.1f} %"
+        )
+    else:
+        found["compared"] = text("no expected value for this arrangement and size")
+    if estimate.attainable is not None:
+        found["attainable"] = share(estimate.attainable)
+        found["above_attainable"] = points(abs(claim - estimate.attainable))
+    below = estimate.market_share_below(claim)
+    if below is not None:
+        found["market_below"] = share(below)
+    if estimate.ceiling is not None:
+        found["ceiling"] = share(estimate.ceiling)
+    return found
+
+
+CHECK = Check(
+    name="efficiency-claim",
+    group="efficiency",
+    run=run,
+    otherwise=Verdict.QUERY,
+    source="Regulation (EU) 547/2012 market surface; Gülich, Centrifugal Pumps, Table 3.9; Hydraulic Institute chart of"
+    " attainable efficiency",
+    wordings={
+        "": Wording("Best efficiency {claim} is plausible: {compared}."),
+        "implausible": Wording(
+            "Best efficiency {claim} is implausible: {compared}, and {above_attainable} above what the published chart calls"
+            " attainable ({attainable}).",
+            "Your curve peaks at {claim}; for this flow and specific speed the published chart of attainable efficiency gives"
+            " {attainable}. Please send the certified test of this hydraulic, with standard and grade.",
+        ),
+        "above attainable": Wording(
+            "Best efficiency {claim} is {above_attainable} above what the published chart calls attainable ({attainable});"
+            " {compared}. About the top tenth of the market is there.",
+            "Your curve peaks at {claim}, above {attainable}, which the published chart calls practically attainable. Please send"
+            " a test certificate of this hydraulic.",
+        ),
+        "high": Wording("Best efficiency {claim} is high for this size and specific speed: {compared}."),
+        "low": Wording(
+            "Best efficiency {claim} is low for this size and specific speed: {compared}, about the worst tenth of the market."
+        ),
+        "very low": Wording(
+            "Best efficiency {claim} is very low for this size and specific speed: {compared}.",
+            "Your curve peaks at {claim}, well below what pumps of this size and specific speed show. Please confirm units,"
+            " stages and best efficiency flow, and that no motor or gear losses are included.",
+        ),
+    },
+)

@@ -1,0 +1,186 @@
+"""Flow, head, power and efficiency agree with one another.
+
+Efficiency is ρgQH/P; a bid that states all four must keep to it. Where it does not, either one figure is stated on another
+basis (units, density, motor input, per stage or per pump), which is asked, or the figures contradict each other. The
+middle of all points decides, so that one misread point does not; the tolerance comes from the printed digits.
+"""
+
+from collections.abc import Iterator
+
+import numpy as np
+
+from bidcheck.case import Case
+from bidcheck.checks.evidence import flow, share, text
+from bidcheck.checks.request import asked, not_applicable
+from bidcheck.curve import Curve, Floats, Points
+from bidcheck.explain import (
+    UNIT_MISTAKES,
+    density_mistakes,
+    frequency_mistakes,
+    in_words,
+    mistakes_that_close,
+    motor_mistakes,
+    pump_mistakes,
+    stage_mistakes,
+)
+from bidcheck.finding import Check, Measured, Verdict, Wording
+from bidcheck.hydraulics.power_balance import balance_tolerance, efficiency_from_power
+from bidcheck.limits import within
+
+DIGITS_AND = 0.005
+"""Added to the tolerance from printed digits. Source: methods of computed exports, which agree to 0.2 %; common practice."""
+
+
+def run(case: Case) -> Iterator[Measured]:
+    """Compare the efficiency that follows from flow, head and power with the one stated."""
+    curve = case.curve
+    if curve is None or curve.head is None:
+        yield asked("all points", "head curve")
+        return
+    if curve.efficiency is None or curve.power is None:
+        if curve.efficiency is None and curve.power is None:
+            yield asked("all points", "efficiency or power")
+        else:
+            yield not_applicable("all points", "only one of efficiency and power is stated, nothing to compare it with")
+        return
+    odd = {(point.column, point.line) for point in case.fits.odd_points} if case.fits is not None else set()
+    rows = balanced_rows(curve, odd)
+    if not rows[0].size:
+        yield asked("all points", "flow, head, efficiency and power together")
+        return
+    yield _systematic(case, *rows[1:])
+    yield from _single_points(case, *rows)
+
+
+def balanced_rows(curve: Curve, leave_out: set[tuple[str, int]]) -> tuple[Floats, Floats, Floats, Floats]:
+    """Points where all four figures stand.
+
+    Returns
+    -------
+    line, flow, gap, tolerance : arrays, shape (n,)
+        `gap` is the efficiency that follows over the one stated; `tolerance` comes from the printed digits. [-]
+    """
+    columns = [points for points in (curve.head, curve.efficiency, curve.power) if points is not None]
+    shared = sorted(set.intersection(*(set(points.line.tolist()) for points in columns)))
+    names = ("head", "efficiency", "power")
+    shared = [line for line in shared if not any((name, line) in leave_out for name in names)]
+    H, eta, P = (_rows(points, shared) for points in columns)
+    keep = (H[0] > 0) & (H[1] > 0) & (eta[1] > 0) & (P[1] > 0)
+    Q, H1, eta1, P1 = H[0][keep], H[1][keep], eta[1][keep], P[1][keep]
+    gap = efficiency_from_power(curve.density, Q, H1, P1) / eta1
+    tolerance = balance_tolerance(H[2][keep] / Q, H[3][keep] / H1, eta[3][keep] / eta1, P[3][keep] / P1)
+    return np.array(shared, dtype=float)[keep], Q, np.asarray(gap), np.asarray(tolerance) + DIGITS_AND
+
+
+def _rows(points: Points, lines: list[int]) -> tuple[Floats, Floats, Floats, Floats]:
+    """Flow, value and their half digits on the lines given."""
+    index = np.flatnonzero(np.isin(points.line, lines))
+    return points.flow[index], points.value[index], points.flow_half_digit[index], points.value_half_digit[index]
+
+
+def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measured:
+    """The gap in the middle of all points, and the single mistake that would close it."""
+    limits, bid = case.inquiry.limits, case.bid
+    middle, allowed = float(np.median(gap)), float(np.median(tolerance))
+    off = abs(middle - 1.0)
+    at = int(np.argmin(np.abs(Q - case.inquiry.duty.rated_flow)))
+    evidence = {
+        "followed_over_stated": share(middle),
+        "gap": share(off),
+        "tolerance": share(allowed),
+        "nearest_flow": flow(float(Q[at])),
+    }
+    if off <= allowed:
+        return Measured(subject="all points", verdict=Verdict.PASS, limit=limits.power_balance, evidence=evidence)
+    mistakes = mistakes_that_close(
+        middle,
+        {"flow": 1, "head": 1, "power": -1},
+        (
+            *UNIT_MISTAKES,
+            *stage_mistakes(bid.stages),
+            *pump_mistakes(case.inquiry.duty.pumps_running),
+            *frequency_mistakes(),
+            *density_mistakes(case.inquiry.liquid.density),
+            *motor_mistakes(bid.driver.efficiency),
+        ),
+    )
+    if mistakes:
+        evidence["mistakes"] = text(in_words(mistakes))
+        return Measured(
+            subject="all points",
+            verdict=Verdict.QUERY,
+            limit=limits.power_balance,
+            evidence=evidence,
+            wording="explained",
+        )
+    if within(off, limits.power_balance, slack=allowed).holds:
+        small = within(off, limits.power_balance_scatter, slack=allowed).holds
+        return Measured(
+            subject="all points",
+            verdict=Verdict.REMARK if small else Verdict.QUERY,
+            limit=limits.power_balance_scatter,
+            evidence=evidence,
+            wording="off",
+        )
+    return Measured(
+        subject="all points",
+        verdict=Verdict.FAIL,
+        limit=limits.power_balance,
+        evidence=evidence,
+        wording="contradiction",
+    )
+
+
+def _single_points(case: Case, line: Floats, Q: Floats, gap: Floats, tolerance: Floats) -> Iterator[Measured]:
+    """Points that fall out of the balance the others keep."""
+    limit = case.inquiry.limits.power_balance
+    middle = float(np.median(gap))
+    name = case.curve.file.rsplit("/", 1)[-1] if case.curve is not None else ""
+    for k in range(len(gap)):
+        off = abs(float(gap[k]) / middle - 1.0)
+        if not within(off, limit, slack=float(tolerance[k])).holds:
+            yield Measured(
+                subject=f"{name}:{int(line[k])}",
+                verdict=Verdict.REMARK,
+                limit=limit,
+                evidence={"flow": flow(float(Q[k])), "gap": share(off), "place": text(f"{name}, line {int(line[k])}")},
+                wording="one point",
+            )
+
+
+CHECK = Check(
+    name="power-balance",
+    group="as submitted",
+    run=run,
+    otherwise=Verdict.QUERY,
+    limits=("power_balance", "power_balance_scatter"),
+    source="P = ρgQH/η; tolerance from the printed digits of each figure plus 0.5 %",
+    wordings={
+        "": Wording(
+            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, in the middle of all"
+            " points; printed digits leave {tolerance}."
+        ),
+        "off": Wording(
+            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, in the middle of all"
+            " points; printed digits leave {tolerance}, and no single mistake explains the {gap}.",
+            "Your head, power and efficiency disagree by {gap} (ρgQH/P against η). Please say which of them is guaranteed, and"
+            " correct the others.",
+        ),
+        "explained": Wording(
+            "Efficiency that follows from flow, head and power is only {followed_over_stated} of that stated. One mistake would"
+            " close the gap: {mistakes}.",
+            "Your head, power and efficiency disagree: ρgQH/P comes to {followed_over_stated} of the stated efficiency. It would"
+            " agree if {mistakes}. Please confirm and correct.",
+        ),
+        "contradiction": Wording(
+            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, off by {gap}; no single"
+            " mistake of units, stages, density or basis explains it.",
+            "Your head, power and efficiency contradict each other by {gap} (ρgQH/P against η). Please state which are right and"
+            " send corrected curves.",
+        ),
+        "one point": Wording(
+            "At {flow} ({place}) head, power and efficiency disagree by {gap}, though they agree elsewhere: one is likely"
+            " misread."
+        ),
+    },
+)

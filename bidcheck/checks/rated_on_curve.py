@@ -1,0 +1,126 @@
+"""The figures a bidder claims at rated flow lie on the bidder's own curve.
+
+Data sheets and curves are often made by different people. A claim better than the curve is not to be relied on; a claim more
+careful than the curve is harmless but worth knowing. A sound bid's claims lie on its curve within printed digits, the fit and
+2 %.
+"""
+
+from collections.abc import Iterator
+
+from bidcheck.case import Case
+from bidcheck.checks.curve_coverage import WORDS
+from bidcheck.checks.evidence import share, text
+from bidcheck.checks.odd_point import AS_EVIDENCE
+from bidcheck.checks.request import not_applicable
+from bidcheck.curve import COLUMNS, Column, Fit
+from bidcheck.explain import (
+    UNIT_MISTAKES,
+    Quantity,
+    density_mistakes,
+    frequency_mistakes,
+    in_words,
+    mistakes_that_close,
+    motor_mistakes,
+    pump_mistakes,
+    stage_mistakes,
+)
+from bidcheck.finding import Check, Measured, Verdict, Wording
+from bidcheck.limits import within
+from bidcheck.quantity import Stated
+
+MORE_IS_BETTER: dict[Column, bool] = {"head": True, "efficiency": True, "power": False, "npsh3": False}
+
+
+def run(case: Case) -> Iterator[Measured]:
+    """Compare each claim with the fitted curve, as pumped, at its flow."""
+    claims, fits = case.bid.claims, case.pumped
+    for column in COLUMNS:
+        claim: Stated | None = getattr(claims, column)
+        fit = fits.of(column) if fits is not None else None
+        yield _compared(case, f"{column} at rated flow", column, claim, fit, case.inquiry.duty.rated_flow)
+    head = fits.head if fits is not None else None
+    yield _compared(case, "shutoff head", "head", claims.shutoff_head, head, 0.0)
+
+
+def _compared(case: Case, subject: str, column: Column, claim: Stated | None, fit: Fit | None, flow: float) -> Measured:
+    """One claim against the curve at one flow."""
+    if claim is None:
+        return not_applicable(subject, "the bid states no such figure apart from the curve")
+    if fit is None or fit.derived or not fit.covers(flow) or fit.at(flow) <= 0:
+        return not_applicable(subject, "the bid's own points do not give this figure at this flow")
+    curve, limit = fit.at(flow), case.inquiry.limits.claim_on_curve
+    gap = claim.value / curve
+    slack = (claim.half_digit + _doubt(fit, flow)) / curve
+    kind = AS_EVIDENCE[column]
+    evidence = {
+        "quantity": text(WORDS[column]),
+        "claim": kind(claim.value),
+        "curve": kind(curve),
+        "gap": share(abs(gap - 1)),
+    }
+    compared = within(abs(gap - 1.0), limit, slack=slack)
+    if compared.holds:
+        return Measured(subject=subject, holds=compared, evidence=evidence)
+    mistakes = _mistakes(case, column, gap)
+    if mistakes:
+        evidence["mistakes"] = text(in_words(mistakes))
+        return Measured(subject=subject, verdict=Verdict.QUERY, limit=limit, evidence=evidence, wording="explained")
+    careful = (gap < 1.0) is MORE_IS_BETTER[column]
+    return Measured(
+        subject=subject,
+        verdict=Verdict.REMARK if careful else Verdict.QUERY,
+        limit=limit,
+        evidence=evidence,
+        wording="careful" if careful else "better",
+    )
+
+
+def _doubt(fit: Fit, flow: float) -> float:
+    """Half the 95 % interval of the fit, or its largest residual where no freedom is left."""
+    width = fit.half_width(flow)
+    return width if width < float("inf") else fit.largest_residual
+
+
+def _mistakes(case: Case, column: Column, gap: float) -> tuple[str, ...]:
+    """The single mistakes that would put the claim on the curve."""
+    if column not in ("head", "power"):
+        return ()
+    quantity: Quantity = "head" if column == "head" else "power"
+    bid = case.bid
+    return mistakes_that_close(
+        gap,
+        {quantity: 1},
+        (
+            *UNIT_MISTAKES,
+            *stage_mistakes(bid.stages),
+            *pump_mistakes(case.inquiry.duty.pumps_running),
+            *frequency_mistakes(),
+            *density_mistakes(case.inquiry.liquid.density),
+            *motor_mistakes(bid.driver.efficiency),
+        ),
+    )
+
+
+CHECK = Check(
+    name="rated-on-curve",
+    group="as submitted",
+    run=run,
+    otherwise=Verdict.QUERY,
+    limits=("claim_on_curve",),
+    source="common practice, no source; tolerance from printed digits and fit",
+    wordings={
+        "": Wording("Claimed {quantity} {claim} lies on the bidder's curve ({curve})."),
+        "better": Wording(
+            "Claimed {quantity} {claim} is better than the bidder's own curve gives, {curve}: off by {gap}.",
+            "You claim {quantity} {claim} where your curve gives {curve}. Which of the two is guaranteed? Please correct the other.",
+        ),
+        "careful": Wording(
+            "Claimed {quantity} {claim} is more careful than the bidder's own curve, {curve}: off by {gap}."
+        ),
+        "explained": Wording(
+            "Claimed {quantity} {claim} is off the bidder's own curve, {curve}, by {gap}. One mistake would close the gap:"
+            " {mistakes}.",
+            "You claim {quantity} {claim} where your curve gives {curve}. They would agree if {mistakes}. Please confirm and correct.",
+        ),
+    },
+)

@@ -1,0 +1,58 @@
+"""Specific speed lies where pumps of this flow are ordinarily built.
+
+Published efficiency charts end where ordinary impellers end: a narrower impeller than its flow suggests, or one beyond mixed
+flow, is unusual and worth a list of like installations. Never more than a remark.
+"""
+
+from collections.abc import Iterator
+
+from bidcheck.case import Case
+from bidcheck.checks.evidence import flow, specific_speed, text
+from bidcheck.checks.request import asked, not_applicable
+from bidcheck.errors import OutOfRange
+from bidcheck.estimates.window import specific_speed_window
+from bidcheck.finding import Check, Measured, Verdict, Wording
+from bidcheck.limits import Limit, within
+from bidcheck.quantity import Kind
+
+
+def run(case: Case) -> Iterator[Measured]:
+    """Compare specific speed at best efficiency with the window of its flow."""
+    nq, bep = case.estimates.nq, case.max_fits.bep if case.max_fits is not None else None
+    if nq is None or bep is None:
+        missing = "water curve" if case.water and case.curve is not None else "best efficiency"
+        yield asked("best efficiency", missing)
+        return
+    try:
+        low, high = specific_speed_window(bep.flow)
+    except OutOfRange as error:
+        yield not_applicable("best efficiency", str(error))
+        return
+    limit = Limit(
+        "specific_speed_window",
+        Kind.SPECIFIC_SPEED,
+        low,
+        high,
+        "ends of the curves of the Hydraulic Institute chart of attainable efficiency",
+        "text",
+    )
+    yield Measured(
+        subject="best efficiency",
+        holds=within(nq, limit),
+        evidence={"nq": specific_speed(nq), "flow": flow(bep.flow), "basis": text(case.estimates.basis)},
+    )
+
+
+CHECK = Check(
+    name="specific-speed-window",
+    group="hydraulics",
+    run=run,
+    otherwise=Verdict.REMARK,
+    source="Hydraulic Institute, chart of attainable efficiency, ends of its curves",
+    wordings={
+        "": Wording(
+            "Specific speed is {nq} at best efficiency flow {flow} ({basis}).",
+            "Specific speed {nq} is unusual for {flow}. Please send a list of like installations.",
+        ),
+    },
+)

@@ -1,0 +1,52 @@
+"""Suction specific speed is not higher than owners accept.
+
+A large impeller eye buys a low NPSH3 at best efficiency and pays for it with rough running at part flow. Owners therefore cap
+suction specific speed. The cap comes from a survey of large split-case refinery pumps and is a limit, not a law: small end
+suction pumps did not show the same trend. Taken at best efficiency, maximum diameter, flow per eye.
+"""
+
+from collections.abc import Iterator
+
+from bidcheck.case import Case
+from bidcheck.checks.evidence import suction_specific_speed, text
+from bidcheck.checks.request import asked
+from bidcheck.finding import Check, Measured, Verdict, Wording
+from bidcheck.limits import within
+
+
+def run(case: Case) -> Iterator[Measured]:
+    """Compare suction specific speed with the caps."""
+    nss, limits = case.estimates.nss, case.inquiry.limits
+    if nss is None:
+        missing = "water curve" if case.water and case.curve is not None else "NPSH3 at best efficiency"
+        yield asked("best efficiency", missing)
+        return
+    high = within(nss, limits.suction_specific_speed_high)
+    ordinary = within(nss, limits.suction_specific_speed)
+    evidence = {"nss": suction_specific_speed(nss), "basis": text(case.estimates.basis)}
+    if not high.holds and not case.bid.inducer:
+        yield Measured(subject="best efficiency", holds=high, evidence=evidence, wording="no inducer")
+    else:
+        yield Measured(subject="best efficiency", holds=ordinary, evidence=evidence)
+
+
+CHECK = Check(
+    name="suction-specific-speed",
+    group="suction",
+    run=run,
+    otherwise=Verdict.QUERY,
+    limits=("suction_specific_speed", "suction_specific_speed_high"),
+    source="common practice, no source",
+    wordings={
+        "": Wording(
+            "Suction specific speed is {nss} ({basis}).",
+            "Your NPSH3 puts suction specific speed at {nss}. Please state the minimum continuous stable flow with the test or"
+            " operating data behind it.",
+        ),
+        "no inducer": Wording(
+            "Suction specific speed is {nss} without an inducer ({basis}): NPSH3 is hard to believe, or the eye very large.",
+            "Your NPSH3 puts suction specific speed at {nss} without an inducer. Please send the NPSH test of this pump, and state"
+            " the minimum continuous stable flow.",
+        ),
+    },
+)
