@@ -133,5 +133,6 @@ class Case:
     """Flows the pump must serve, with their names: "rated", "smallest flow", "normal flow", "largest flow"."""
     water: str
     """Why there is no curve in water to judge efficiency and specific speed by; empty where there is one."""
-    others: tuple[Bid, ...]
+    all_bids: tuple[Bid, ...]
+    """The latest revision of every bid of the inquiry, this one included; one tuple shared by all cases."""
     assumptions: tuple[Assumption, ...]

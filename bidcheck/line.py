@@ -1,6 +1,7 @@
 """The whole line, from an inquiry with its bids to the evaluation. The first file to read."""
 
 from bidcheck import __version__
+from bidcheck.case import Case
 from bidcheck.checks import ALL
 from bidcheck.checks.runner import run_checks
 from bidcheck.evaluation import BidEvaluation, Evaluation, outcome_of
@@ -21,9 +22,12 @@ def evaluate(inquiry: Inquiry) -> Evaluation:
     Evaluation
         Bids in the order of their names.
     """
-    cases = [prepare(inquiry, bid) for bid in inquiry.latest_bids()]
-    bids = []
-    for case in cases:
-        findings = run_checks(case, ALL)
-        bids.append(BidEvaluation(case=case, findings=findings, outcome=outcome_of(findings)))
-    return Evaluation(inquiry=inquiry, bids=tuple(bids), version=__version__)
+    latest = inquiry.latest_bids()
+    cases = [prepare(inquiry, bid, latest) for bid in latest]
+    return Evaluation(inquiry=inquiry, bids=tuple(judged(case) for case in cases), version=__version__)
+
+
+def judged(case: Case) -> BidEvaluation:
+    """Run every check over one case and add the findings up."""
+    findings = run_checks(case, ALL)
+    return BidEvaluation(case=case, findings=findings, outcome=outcome_of(findings))

@@ -21,7 +21,7 @@ SAME_DIAMETER = 0.002
 """Two diameters within 0.2 % are one. Source: common practice, no source; printed diameters are rounded to 1 mm."""
 
 
-def prepare(inquiry: Inquiry, bid: Bid) -> Case:
+def prepare(inquiry: Inquiry, bid: Bid, all_bids: tuple[Bid, ...] = ()) -> Case:
     """Prepare one bid for the checks.
 
     Parameters
@@ -29,6 +29,8 @@ def prepare(inquiry: Inquiry, bid: Bid) -> Case:
     inquiry : Inquiry
     bid : Bid
         One of its bids.
+    all_bids : tuple of Bid
+        The latest revision of every bid, for comparisons between bids.
 
     Returns
     -------
@@ -53,11 +55,11 @@ def prepare(inquiry: Inquiry, bid: Bid) -> Case:
         pumped=pumped,
         max_curve=max_curve,
         max_fits=max_fits,
-        estimates=_estimates(inquiry, bid, max_curve, max_fits, water),
-        at_duty=_with_claims(_at_flow(inquiry, pumped, flow, npsh_available_at(inquiry, flow)), bid),
+        estimates=_estimates(bid, max_curve, max_fits, water),
+        at_duty=_with_claims(_at_flow(pumped, flow, npsh_available_at(inquiry, flow)), bid),
         operating=_operating(inquiry, bid, pumped),
         water=water,
-        others=tuple(other for other in inquiry.latest_bids() if other.bidder != bid.bidder),
+        all_bids=all_bids,
         assumptions=(*bid.assumptions, *assumptions),
     )
 
@@ -117,7 +119,7 @@ def _value(fit: Fit | None, flow: float) -> float | None:
     return fit.at(flow) if fit is not None and fit.covers(flow) else None
 
 
-def _at_flow(inquiry: Inquiry, pumped: Fits | None, flow: float, npsha: float | None) -> AtFlow:
+def _at_flow(pumped: Fits | None, flow: float, npsha: float | None) -> AtFlow:
     """Read the fitted curves, as pumped, at one flow."""
     values: dict[Column, float | None] = dict.fromkeys(COLUMNS)
     if pumped is not None:
@@ -160,7 +162,7 @@ def _operating(inquiry: Inquiry, bid: Bid, pumped: Fits | None) -> tuple[tuple[s
     for name, flow in named:
         if flow is None or flow in found:
             continue
-        at = _at_flow(inquiry, pumped, flow, npsh_available_at(inquiry, flow))
+        at = _at_flow(pumped, flow, npsh_available_at(inquiry, flow))
         found[flow] = (name, _with_claims(at, bid) if name == "rated" else at)
     return tuple(found.values())
 
@@ -176,7 +178,7 @@ def _basis(bid: Bid, curve: Curve | None) -> str:
     return "curve of the largest diameter given"
 
 
-def _estimates(inquiry: Inquiry, bid: Bid, curve: Curve | None, fits: Fits | None, water: str) -> Estimates:
+def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, water: str) -> Estimates:
     """Specific speeds at the best efficiency point of the largest diameter, and what is to be expected there."""
     basis = _basis(bid, curve)
     bep = fits.bep if fits is not None else None

@@ -1,8 +1,8 @@
 """Rated flow lies near best efficiency.
 
-A pump bought far from its best efficiency point runs rough, wears seals and bearings and wastes power for its whole life.
-A sound bid puts rated flow between 80 and 110 % of best efficiency flow **at the diameter offered**. Where the limit lies
-inside the uncertainty of the fitted best efficiency flow, the finding is a remark.
+A pump bought far from its best efficiency point runs rough, wears seals and bearings and wastes power for its whole
+life. A sound bid puts rated flow between 80 and 110 % of best efficiency flow **at the diameter offered**. Where
+the limit lies inside the uncertainty of the fitted best efficiency flow, the finding is a remark.
 """
 
 from collections.abc import Iterator
@@ -67,17 +67,19 @@ CHECK = Check(
     wordings={
         "": Wording(
             "Rated flow {rated_flow} is {ratio} of best efficiency flow {bep_flow} at the offered diameter.",
-            "At the offered diameter your points put best efficiency at {bep_flow}, so rated flow {rated_flow} is {ratio} of"
-            " it. Please offer a selection within {limit}, or show by operating data why this one will run well.",
+            "At the offered diameter your points put best efficiency at {bep_flow}, so rated flow {rated_flow} is"
+            " {ratio} of it. Please offer a selection within {limit}, or show by operating data why this one will run"
+            " well.",
         ),
         "inside the interval": Wording(
-            "Rated flow {rated_flow} is {ratio} of fitted best efficiency flow {bep_flow}, but the points fix that only"
-            " between {low} and {high} (declared: {declared}), and the limit lies inside.",
+            "Rated flow {rated_flow} is {ratio} of fitted best efficiency flow {bep_flow}, but the points fix that"
+            " only between {low} and {high} (declared: {declared}), and the limit lies inside.",
         ),
         "beyond the points": Wording(
-            "Efficiency still rises at the last point, {last_flow}: rated flow is less than {ratio} of best efficiency flow.",
-            "Your curve ends at {last_flow} while efficiency still rises. Please extend it beyond best efficiency, and state"
-            " the best efficiency flow at the offered diameter.",
+            "Efficiency still rises at the last point, {last_flow}: rated flow is less than {ratio} of best"
+            " efficiency flow.",
+            "Your curve ends at {last_flow} while efficiency still rises. Please extend it beyond best efficiency,"
+            " and state the best efficiency flow at the offered diameter.",
         ),
     },
 )

@@ -1,8 +1,8 @@
 """The curve has enough points and reaches from shutoff to beyond the largest flow asked for.
 
-Nothing is read beyond the points a bidder supplies, so a curve that stops short hides what the pump does there: the peak of
-efficiency, the steep end of NPSH3, the largest power. A sound bid gives at least five points of each quantity, from shutoff
-to beyond the largest flow the inquiry asks for and beyond best efficiency.
+Nothing is read beyond the points a bidder supplies, so a curve that stops short hides what the pump does there: the
+peak of efficiency, the steep end of NPSH3, the largest power. A sound bid gives at least five points of each
+quantity, from shutoff to beyond the largest flow the inquiry asks for and beyond best efficiency.
 """
 
 from collections.abc import Iterator
@@ -90,12 +90,13 @@ CHECK = Check(
     wordings={
         "": Wording(
             "Points of {quantity} end at {last_flow}; the largest flow asked for is {largest_flow}.",
-            "Your points of {quantity} end at {last_flow}. Please extend them to beyond {largest_flow}, the largest flow of the"
-            " inquiry.",
+            "Your points of {quantity} end at {last_flow}. Please extend them to beyond {largest_flow}, the largest"
+            " flow of the inquiry.",
         ),
         "points": Wording(
             "The curve has {points} points of {quantity}.",
-            "Please send at least five points of {quantity} between shutoff and the end of the curve; {points} do not fix it.",
+            "Please send at least five points of {quantity} between shutoff and the end of the curve; {points} do not"
+            " fix it.",
         ),
         "shutoff": Wording("The head curve starts at {first_flow}."),
         "end of curve": Wording(

@@ -1,8 +1,8 @@
 """Head rises steadily towards shutoff.
 
-A head curve that droops towards shutoff meets some heads at two flows: pumps in parallel can hunt or be pushed off the line,
-and a throttled pump can swing. Preferred everywhere, needed in parallel. A droop of up to 1 % of shutoff head is within the
-accuracy of the points. Both the fit and the points themselves must show it.
+A head curve that droops towards shutoff meets some heads at two flows: pumps in parallel can hunt or be pushed off
+the line, and a throttled pump can swing. Preferred everywhere, needed in parallel. A droop of up to 1 % of shutoff
+head is within the accuracy of the points. Both the fit and the points themselves must show it.
 """
 
 from collections.abc import Iterator
@@ -80,10 +80,10 @@ CHECK = Check(
             "Please state the flow below which the pump must not be throttled.",
         ),
         "parallel": Wording(
-            "Head droops towards shutoff by {droop}: {shutoff_head} there against {highest} at {peak_flow}, and pumps run in"
-            " parallel.",
-            "Your head curve droops towards shutoff by {droop}. Pumps run in parallel here: please offer a curve that rises to"
-            " shutoff.",
+            "Head droops towards shutoff by {droop}: {shutoff_head} there against {highest} at {peak_flow}, and pumps"
+            " run in parallel.",
+            "Your head curve droops towards shutoff by {droop}. Pumps run in parallel here: please offer a curve that"
+            " rises to shutoff.",
         ),
         "steady": Wording("Head rises towards shutoff ({shutoff_head}); droop {droop}."),
     },

@@ -1,8 +1,8 @@
 """The best efficiency point a bidder declares is that of the bidder's own points.
 
-Best efficiency decides how near to it the pump is bought, and its specific speed. A declared point away from the peak of the
-curve flatters one or the other. A sound bid declares flow within 5 % of the fitted peak, or inside its uncertainty, and
-efficiency within a point.
+Best efficiency decides how near to it the pump is bought, and its specific speed. A declared point away from the
+peak of the curve flatters one or the other. A sound bid declares flow within 5 % of the fitted peak, or inside its
+uncertainty, and efficiency within a point.
 """
 
 from collections.abc import Iterator
@@ -71,10 +71,10 @@ CHECK = Check(
     source="common practice, no source",
     wordings={
         "": Wording(
-            "Declared best efficiency flow {declared} is {ratio} of that of the bidder's points, {fitted} (between {low} and"
-            " {high}).",
-            "You declare best efficiency at {declared}; your points put it at {fitted}. Please say which holds at the offered"
-            " diameter.",
+            "Declared best efficiency flow {declared} is {ratio} of that of the bidder's points, {fitted} (between"
+            " {low} and {high}).",
+            "You declare best efficiency at {declared}; your points put it at {fitted}. Please say which holds at the"
+            " offered diameter.",
         ),
         "efficiency": Wording(
             "Declared best efficiency {declared} against {fitted} of the bidder's points: {difference}.",

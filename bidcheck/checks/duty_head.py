@@ -50,13 +50,14 @@ CHECK = Check(
     wordings={
         "": Wording(
             "Head at rated flow {rated_flow} is {head}, {ratio} of the rated head {rated_head}.",
-            "Your curve gives {head} at {rated_flow}; {rated_head} are asked for. Please offer a diameter that meets the duty.",
+            "Your curve gives {head} at {rated_flow}; {rated_head} are asked for. Please offer a diameter that meets"
+            " the duty.",
         ),
         "claimed": Wording(
-            "Head at rated flow {rated_flow} is claimed as {head}, {ratio} of the rated head {rated_head}; the curve does not"
-            " reach it.",
-            "You claim {head} at {rated_flow}; {rated_head} are asked for. Please offer a diameter that meets the duty, with its"
-            " curve.",
+            "Head at rated flow {rated_flow} is claimed as {head}, {ratio} of the rated head {rated_head}; the curve"
+            " does not reach it.",
+            "You claim {head} at {rated_flow}; {rated_head} are asked for. Please offer a diameter that meets the"
+            " duty, with its curve.",
         ),
     },
 )

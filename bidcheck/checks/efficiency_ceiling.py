@@ -1,8 +1,8 @@
 """Claimed best efficiency leaves room for the losses no pump escapes.
 
-Disc friction of the offered diameter, leakage through the neck rings, the best hydraulic efficiency known and small mechanical
-losses add up to a ceiling. A claim above it, beyond the doubt of the fit, contradicts the diameter, speed and flow of the same
-bid.
+Disc friction of the offered diameter, leakage through the neck rings, the best hydraulic efficiency known and small
+mechanical losses add up to a ceiling. A claim above it, beyond the doubt of the fit, contradicts the diameter,
+speed and flow of the same bid.
 """
 
 from collections.abc import Iterator
@@ -54,10 +54,10 @@ CHECK = Check(
     wordings={
         "": Wording("Best efficiency {claim} stays below the loss ceiling, {ceiling}."),
         "above": Wording(
-            "Best efficiency {claim} is {above_ceiling} above the ceiling {ceiling} that disc friction, leakage and the best"
-            " hydraulic efficiency leave for the offered diameter, speed and flow.",
-            "Your curve peaks at {claim}, more than the losses of your own impeller diameter, speed and flow leave ({ceiling})."
-            " Please correct the efficiency, or the diameter, speed or flow it belongs to.",
+            "Best efficiency {claim} is {above_ceiling} above the ceiling {ceiling} that disc friction, leakage and"
+            " the best hydraulic efficiency leave for the offered diameter, speed and flow.",
+            "Your curve peaks at {claim}, more than the losses of your own impeller diameter, speed and flow leave"
+            " ({ceiling}). Please correct the efficiency, or the diameter, speed or flow it belongs to.",
         ),
     },
 )

@@ -1,9 +1,10 @@
 """Claimed best efficiency is plausible for a pump of this size and specific speed.
 
-The efficiency of the bidder's curve at best efficiency is held against estimates that do not come from the bidder: the middle
-of the surveyed market of its class, and what a published chart calls practically attainable. A claim above the attainable
-asks for a test; one far above it is called implausible. A low claim is poor for its class or stated on another basis. No such
-estimate can show an overstatement of 3 points; 5 seldom, 8 mostly, 10 nearly always.
+The efficiency of the bidder's curve at best efficiency is held against estimates that do not come from the bidder:
+the middle of the surveyed market of its class, and what a published chart calls practically attainable. A claim
+above the attainable asks for a test; one far above it is called implausible. A low claim is poor for its class or
+stated on another basis. No such estimate can show an overstatement of 3 points; 5 seldom, 8 mostly, 10 nearly
+always.
 """
 
 from collections.abc import Iterator
@@ -16,6 +17,17 @@ from bidcheck.limits import Limit, Mark, within
 from bidcheck.quantity import Kind
 
 CHART = "Hydraulic Institute chart of attainable efficiency, clean cold water"
+
+MIDDLE = "{distance} {side} the expected {expected}"
+BEYOND = "{above_attainable} above what the published chart calls practically attainable ({attainable})"
+CERTIFIED_TEST = (
+    "Your curve peaks at {claim}; for this flow and specific speed the published chart of attainable efficiency gives"
+    " {attainable}. Please send the certified test of this hydraulic, with standard and grade."
+)
+TEST_CERTIFICATE = (
+    "Your curve peaks at {claim}, above {attainable}, which the published chart calls practically attainable. Please"
+    " send a test certificate of this hydraulic."
+)
 
 
 def run(case: Case) -> Iterator[Measured]:
@@ -40,6 +52,8 @@ def _placed(case: Case, estimate: EfficiencyEstimate, claim: float) -> Measured:
     high = _above(estimate, claim)
     step = high if high is not None else _below(estimate, claim)
     wording, verdict, limit = step if step is not None else ("", Verdict.PASS, _band(estimate))
+    if estimate.expected is None:
+        wording = f"{wording}, no expected value".removeprefix(", ")
     return Measured(
         subject="best efficiency",
         verdict=verdict,
@@ -104,13 +118,8 @@ def _evidence(case: Case, estimate: EfficiencyEstimate, claim: float) -> dict[st
         found["nq"] = specific_speed(case.estimates.nq)
     if estimate.expected is not None:
         found["expected"] = share(estimate.expected)
-        found["above_expected"] = points(abs(claim - estimate.expected))
-        found["compared"] = text(
-            f"{100 * abs(claim - estimate.expected):.1f} points"
-            f" {'above' if claim >= estimate.expected else 'below'} the expected {100 * estimate.expected:.1f} %"
-        )
-    else:
-        found["compared"] = text("no expected value for this arrangement and size")
+        found["distance"] = points(abs(claim - estimate.expected))
+        found["side"] = text("above" if claim >= estimate.expected else "below")
     if estimate.attainable is not None:
         found["attainable"] = share(estimate.attainable)
         found["above_attainable"] = points(abs(claim - estimate.attainable))
@@ -127,30 +136,34 @@ CHECK = Check(
     group="efficiency",
     run=run,
     otherwise=Verdict.QUERY,
-    source="Regulation (EU) 547/2012 market surface; Gülich, Centrifugal Pumps, Table 3.9; Hydraulic Institute chart of"
-    " attainable efficiency",
+    source=(
+        "Regulation (EU) 547/2012 market surface; Gülich, Centrifugal Pumps, Table 3.9; Hydraulic Institute chart of"
+        " attainable efficiency"
+    ),
     wordings={
-        "": Wording("Best efficiency {claim} is plausible: {compared}."),
-        "implausible": Wording(
-            "Best efficiency {claim} is implausible: {compared}, and {above_attainable} above what the published chart calls"
-            " attainable ({attainable}).",
-            "Your curve peaks at {claim}; for this flow and specific speed the published chart of attainable efficiency gives"
-            " {attainable}. Please send the certified test of this hydraulic, with standard and grade.",
+        "": Wording("Best efficiency {claim} is plausible: {distance} {side} the expected {expected}."),
+        "no expected value": Wording(
+            "Best efficiency {claim} stays below what the published chart calls attainable; for this arrangement and"
+            " size there is no expected value, so a low claim is not judged."
+        ),
+        "implausible": Wording(f"Best efficiency {{claim}} is implausible: {MIDDLE}, and {BEYOND}.", CERTIFIED_TEST),
+        "implausible, no expected value": Wording(
+            f"Best efficiency {{claim}} is implausible: {BEYOND}.", CERTIFIED_TEST
         ),
         "above attainable": Wording(
-            "Best efficiency {claim} is {above_attainable} above what the published chart calls attainable ({attainable});"
-            " {compared}. About the top tenth of the market is there.",
-            "Your curve peaks at {claim}, above {attainable}, which the published chart calls practically attainable. Please send"
-            " a test certificate of this hydraulic.",
+            f"Best efficiency {{claim}} is {BEYOND}; {MIDDLE}. About the top tenth of the surveyed market is there.",
+            TEST_CERTIFICATE,
         ),
-        "high": Wording("Best efficiency {claim} is high for this size and specific speed: {compared}."),
+        "above attainable, no expected value": Wording(f"Best efficiency {{claim}} is {BEYOND}.", TEST_CERTIFICATE),
+        "high": Wording(f"Best efficiency {{claim}} is high for this size and specific speed: {MIDDLE}."),
         "low": Wording(
-            "Best efficiency {claim} is low for this size and specific speed: {compared}, about the worst tenth of the market."
+            f"Best efficiency {{claim}} is low for this size and specific speed: {MIDDLE}, about the worst tenth of the"
+            " surveyed market."
         ),
         "very low": Wording(
-            "Best efficiency {claim} is very low for this size and specific speed: {compared}.",
-            "Your curve peaks at {claim}, well below what pumps of this size and specific speed show. Please confirm units,"
-            " stages and best efficiency flow, and that no motor or gear losses are included.",
+            f"Best efficiency {{claim}} is very low for this size and specific speed: {MIDDLE}.",
+            "Your curve peaks at {claim}, well below what pumps of this size and specific speed show. Please confirm"
+            " units, stages and best efficiency flow, and that no motor or gear losses are included.",
         ),
     },
 )

@@ -1,8 +1,8 @@
 """Every flow the inquiry asks for lies in the range the bidder allows.
 
-The pump will be run over the whole range of the plant, not at one point. The smallest flow must not lie below the minimum
-continuous flow the bidder states, the largest not above the largest allowable flow, or the end of the curve where none is
-stated.
+The pump will be run over the whole range of the plant, not at one point. The smallest flow must not lie below the
+minimum continuous flow the bidder states, the largest not above the largest allowable flow, or the end of the curve
+where none is stated.
 """
 
 from collections.abc import Iterator
@@ -65,14 +65,14 @@ CHECK = Check(
         ),
         "smallest": Wording(
             "Smallest flow {smallest_flow} against the minimum continuous flow the bidder states, {allowed}.",
-            "The inquiry asks for {smallest_flow}; your minimum continuous flow is {allowed}. Please offer a pump for the whole"
-            " range, or say what bypass you require.",
+            "The inquiry asks for {smallest_flow}; your minimum continuous flow is {allowed}. Please offer a pump for"
+            " the whole range, or say what bypass you require.",
         ),
         "end of curve": Wording(
-            "Largest flow {largest_flow} against the end of the head curve, {allowed}; the bidder states no largest allowable"
-            " flow.",
-            "The inquiry asks for {largest_flow}; your curve ends at {allowed}. Please extend it and state the largest allowable"
-            " flow.",
+            "Largest flow {largest_flow} against the end of the head curve, {allowed}; the bidder states no largest"
+            " allowable flow.",
+            "The inquiry asks for {largest_flow}; your curve ends at {allowed}. Please extend it and state the"
+            " largest allowable flow.",
         ),
     },
 )

@@ -1,7 +1,7 @@
 """The bid gives what is needed to judge it.
 
-Head, efficiency or power, NPSH3 at rated flow and the driver rating decide: without them a bid is incomplete. The rest is
-asked for without holding the bid up. What is missing is never taken as passed.
+Head, efficiency or power, NPSH3 at rated flow and the driver rating decide: without them a bid is incomplete. The
+rest is asked for without holding the bid up. What is missing is never taken as passed.
 """
 
 from collections.abc import Iterator

@@ -1,8 +1,8 @@
 """NPSH available exceeds NPSH3 by a margin, at rated flow and at the largest flow.
 
-At NPSH3 the pump already loses 3 % of its head to cavitation. The margin is wanted as a ratio and as a difference, the
-stricter of the two, and a larger one where suction specific speed is high. NPSH3 rises and NPSH available falls with flow, so
-a pump that is safe at rated flow can cavitate at the largest.
+At NPSH3 the pump already loses 3 % of its head to cavitation. The margin is wanted as a ratio and as a difference,
+the stricter of the two, and a larger one where suction specific speed is high. NPSH3 rises and NPSH available falls
+with flow, so a pump that is safe at rated flow can cavitate at the largest.
 """
 
 from collections.abc import Iterator
@@ -86,13 +86,13 @@ CHECK = Check(
     wordings={
         "": Wording(
             "At {flow} NPSH available {npsha} exceeds NPSH3 {npsh3} by {margin} (ratio {ratio}).",
-            "At {flow} your NPSH3 of {npsh3} leaves a margin of {margin} to the {npsha} available. Please offer a margin of"
-            " {limit}, or show by a witnessed NPSH test that this one suffices.",
+            "At {flow} your NPSH3 of {npsh3} leaves a margin of {margin} to the {npsha} available. Please offer a"
+            " margin of {limit}, or show by a witnessed NPSH test that this one suffices.",
         ),
         "none left": Wording(
             "At {flow} NPSH3 {npsh3} is more than the {npsha} available: margin {margin}.",
-            "At {flow} your NPSH3 of {npsh3} exceeds the {npsha} available. Please offer a pump that runs there without loss of"
-            " head.",
+            "At {flow} your NPSH3 of {npsh3} exceeds the {npsha} available. Please offer a pump that runs there"
+            " without loss of head.",
         ),
     },
 )

@@ -1,8 +1,9 @@
 """No point lies off its own curve.
 
-One misread or mistyped figure among good ones spoils whatever is computed from the curve. A point is called odd when it lies
-farther from the curve through the other points than chance allows (externally studentised residual beyond a Bonferroni bound
-at 1 %) and by more than 1 % of the curve's largest value. It is left out of the fit and shown with the value that would fit.
+One misread or mistyped figure among good ones spoils whatever is computed from the curve. A point is called odd
+when it lies farther from the curve through the other points than chance allows (externally studentised residual
+beyond a Bonferroni bound at 1 %) and by more than 1 % of the curve's largest value. It is left out of the fit and
+shown with the value that would fit.
 """
 
 from collections.abc import Iterator
@@ -76,14 +77,14 @@ CHECK = Check(
     source="externally studentised residuals with a Bonferroni bound; the shares are common practice, no source",
     wordings={
         "": Wording(
-            "{quantity} {found} at {flow} ({place}) lies off its own curve by {deviation} of the curve's largest value;"
-            " {would_fit} would fit. The point is left out of the fit.",
+            "{quantity} {found} at {flow} ({place}) lies off its own curve by {deviation} of the curve's largest"
+            " value; {would_fit} would fit. The point is left out of the fit.",
             "Please confirm {quantity} at {flow}: you give {found}, the other points suggest {would_fit}.",
         ),
         "none": Wording("No point lies off its own curve."),
         "doubtful fit": Wording(
-            "The few or uneven points of {quantity} leave the fit in doubt: {fitted} by the polynomial and {interpolated} by"
-            " interpolation at {flow}."
+            "The few or uneven points of {quantity} leave the fit in doubt: {fitted} by the polynomial and"
+            " {interpolated} by interpolation at {flow}."
         ),
     },
 )

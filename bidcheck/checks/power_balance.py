@@ -1,8 +1,9 @@
 """Flow, head, power and efficiency agree with one another.
 
-Efficiency is ρgQH/P; a bid that states all four must keep to it. Where it does not, either one figure is stated on another
-basis (units, density, motor input, per stage or per pump), which is asked, or the figures contradict each other. The
-middle of all points decides, so that one misread point does not; the tolerance comes from the printed digits.
+Efficiency is ρgQH/P; a bid that states all four must keep to it. Where it does not, either one figure is stated on
+another basis (units, density, motor input, per stage or per pump), which is asked, or the figures contradict each
+other. The middle of all points decides, so that one misread point does not; the tolerance comes from the printed
+digits.
 """
 
 from collections.abc import Iterator
@@ -28,7 +29,7 @@ from bidcheck.hydraulics.power_balance import balance_tolerance, efficiency_from
 from bidcheck.limits import within
 
 DIGITS_AND = 0.005
-"""Added to the tolerance from printed digits. Source: methods of computed exports, which agree to 0.2 %; common practice."""
+"""Added to the tolerance from printed digits. Source: common practice, no source; computed exports agree to 0.2 %."""
 
 
 def run(case: Case) -> Iterator[Measured]:
@@ -143,7 +144,11 @@ def _single_points(case: Case, line: Floats, Q: Floats, gap: Floats, tolerance: 
                 subject=f"{name}:{int(line[k])}",
                 verdict=Verdict.REMARK,
                 limit=limit,
-                evidence={"flow": flow(float(Q[k])), "gap": share(off), "place": text(f"{name}, line {int(line[k])}")},
+                evidence={
+                    "flow": flow(float(Q[k])),
+                    "gap": share(off),
+                    "place": text(f"{name}, line {int(line[k])}"),
+                },
                 wording="one point",
             )
 
@@ -157,30 +162,30 @@ CHECK = Check(
     source="P = ρgQH/η; tolerance from the printed digits of each figure plus 0.5 %",
     wordings={
         "": Wording(
-            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, in the middle of all"
-            " points; printed digits leave {tolerance}."
+            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, in the"
+            " middle of all points; printed digits leave {tolerance}."
         ),
         "off": Wording(
-            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, in the middle of all"
-            " points; printed digits leave {tolerance}, and no single mistake explains the {gap}.",
-            "Your head, power and efficiency disagree by {gap} (ρgQH/P against η). Please say which of them is guaranteed, and"
-            " correct the others.",
+            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, in the"
+            " middle of all points; printed digits leave {tolerance}, and no single mistake explains the {gap}.",
+            "Your head, power and efficiency disagree by {gap} (ρgQH/P against η). Please say which of them is"
+            " guaranteed, and correct the others.",
         ),
         "explained": Wording(
-            "Efficiency that follows from flow, head and power is only {followed_over_stated} of that stated. One mistake would"
-            " close the gap: {mistakes}.",
-            "Your head, power and efficiency disagree: ρgQH/P comes to {followed_over_stated} of the stated efficiency. It would"
-            " agree if {mistakes}. Please confirm and correct.",
+            "Efficiency that follows from flow, head and power is only {followed_over_stated} of that stated. One"
+            " mistake would close the gap: {mistakes}.",
+            "Your head, power and efficiency disagree: ρgQH/P comes to {followed_over_stated} of the stated"
+            " efficiency. It would agree if {mistakes}. Please confirm and correct.",
         ),
         "contradiction": Wording(
-            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, off by {gap}; no single"
-            " mistake of units, stages, density or basis explains it.",
-            "Your head, power and efficiency contradict each other by {gap} (ρgQH/P against η). Please state which are right and"
-            " send corrected curves.",
+            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, off by"
+            " {gap}; no single mistake of units, stages, density or basis explains it.",
+            "Your head, power and efficiency contradict each other by {gap} (ρgQH/P against η). Please state which"
+            " are right and send corrected curves.",
         ),
         "one point": Wording(
-            "At {flow} ({place}) head, power and efficiency disagree by {gap}, though they agree elsewhere: one is likely"
-            " misread."
+            "At {flow} ({place}) head, power and efficiency disagree by {gap}, though they agree elsewhere: one is"
+            " likely misread."
         ),
     },
 )

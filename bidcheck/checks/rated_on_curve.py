@@ -1,8 +1,8 @@
 """The figures a bidder claims at rated flow lie on the bidder's own curve.
 
-Data sheets and curves are often made by different people. A claim better than the curve is not to be relied on; a claim more
-careful than the curve is harmless but worth knowing. A sound bid's claims lie on its curve within printed digits, the fit and
-2 %.
+Data sheets and curves are often made by different people. A claim better than the curve is not to be relied on; a
+claim more careful than the curve is harmless but worth knowing. A sound bid's claims lie on its curve within
+printed digits, the fit and 2 %.
 """
 
 from collections.abc import Iterator
@@ -37,12 +37,15 @@ def run(case: Case) -> Iterator[Measured]:
     for column in COLUMNS:
         claim: Stated | None = getattr(claims, column)
         fit = fits.of(column) if fits is not None else None
-        yield _compared(case, f"{column} at rated flow", column, claim, fit, case.inquiry.duty.rated_flow)
+        flow = case.inquiry.duty.rated_flow
+        yield _compared(case, f"{column} at rated flow", column, claim, fit=fit, flow=flow)
     head = fits.head if fits is not None else None
-    yield _compared(case, "shutoff head", "head", claims.shutoff_head, head, 0.0)
+    yield _compared(case, "shutoff head", "head", claims.shutoff_head, fit=head, flow=0.0)
 
 
-def _compared(case: Case, subject: str, column: Column, claim: Stated | None, fit: Fit | None, flow: float) -> Measured:
+def _compared(
+    case: Case, subject: str, column: Column, claim: Stated | None, *, fit: Fit | None, flow: float
+) -> Measured:
     """One claim against the curve at one flow."""
     if claim is None:
         return not_applicable(subject, "the bid states no such figure apart from the curve")
@@ -112,15 +115,17 @@ CHECK = Check(
         "": Wording("Claimed {quantity} {claim} lies on the bidder's curve ({curve})."),
         "better": Wording(
             "Claimed {quantity} {claim} is better than the bidder's own curve gives, {curve}: off by {gap}.",
-            "You claim {quantity} {claim} where your curve gives {curve}. Which of the two is guaranteed? Please correct the other.",
+            "You claim {quantity} {claim} where your curve gives {curve}. Which of the two is guaranteed? Please"
+            " correct the other.",
         ),
         "careful": Wording(
             "Claimed {quantity} {claim} is more careful than the bidder's own curve, {curve}: off by {gap}."
         ),
         "explained": Wording(
-            "Claimed {quantity} {claim} is off the bidder's own curve, {curve}, by {gap}. One mistake would close the gap:"
-            " {mistakes}.",
-            "You claim {quantity} {claim} where your curve gives {curve}. They would agree if {mistakes}. Please confirm and correct.",
+            "Claimed {quantity} {claim} is off the bidder's own curve, {curve}, by {gap}. One mistake would close the"
+            " gap: {mistakes}.",
+            "You claim {quantity} {claim} where your curve gives {curve}. They would agree if {mistakes}. Please"
+            " confirm and correct.",
         ),
     },
 )

@@ -4,18 +4,24 @@ from bidcheck.checks.evidence import text
 from bidcheck.finding import Measured, Verdict, Wording
 
 REQUESTS: dict[str, str] = {
-    "head curve": "Please send head against flow, from shutoff to the end of the curve, at the offered diameter and speed.",
+    "head curve": (
+        "Please send head against flow, from shutoff to the end of the curve, at the offered diameter and speed."
+    ),
     "efficiency or power": "Please send efficiency or shaft power against flow at the offered diameter and speed.",
     "efficiency": "Please send efficiency against flow at the offered diameter and speed.",
-    "best efficiency": "Please send the efficiency curve at the offered diameter to beyond best efficiency, and state the"
-    " best efficiency flow.",
+    "best efficiency": (
+        "Please send the efficiency curve at the offered diameter to beyond best efficiency, and state the"
+        " best efficiency flow."
+    ),
     "NPSH3 at rated flow": "Please state NPSH3 at rated flow, for cold water, without reduction for other liquids.",
     "NPSH3 at best efficiency": "Please send NPSH3 against flow to beyond best efficiency flow.",
     "NPSH3 at the largest flow": "Please send NPSH3 against flow up to the largest flow of the inquiry.",
     "shutoff head": "Please state the head at shutoff at the offered diameter.",
     "driver rating": "Please state rating, speed and efficiency of the driver offered.",
-    "minimum continuous flow": "Please state the minimum continuous flow at the offered diameter, and whether stability or"
-    " temperature sets it.",
+    "minimum continuous flow": (
+        "Please state the minimum continuous flow at the offered diameter, and whether stability or"
+        " temperature sets it."
+    ),
     "largest allowable flow": "Please state the largest allowable flow at the offered diameter.",
     "impeller diameters": "Please state rated, maximum and minimum impeller diameter.",
     "guarantee": "Please state the acceptance standard and grade, and whether power or efficiency is guaranteed.",

@@ -1,7 +1,7 @@
 """Specific speed lies where pumps of this flow are ordinarily built.
 
-Published efficiency charts end where ordinary impellers end: a narrower impeller than its flow suggests, or one beyond mixed
-flow, is unusual and worth a list of like installations. Never more than a remark.
+Published efficiency charts end where ordinary impellers end: a narrower impeller than its flow suggests, or one
+beyond mixed flow, is unusual and worth a list of like installations. Never more than a remark.
 """
 
 from collections.abc import Iterator

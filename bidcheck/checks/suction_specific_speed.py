@@ -1,8 +1,9 @@
 """Suction specific speed is not higher than owners accept.
 
-A large impeller eye buys a low NPSH3 at best efficiency and pays for it with rough running at part flow. Owners therefore cap
-suction specific speed. The cap comes from a survey of large split-case refinery pumps and is a limit, not a law: small end
-suction pumps did not show the same trend. Taken at best efficiency, maximum diameter, flow per eye.
+A large impeller eye buys a low NPSH3 at best efficiency and pays for it with rough running at part flow. Owners
+therefore cap suction specific speed. The cap comes from a survey of large split-case refinery pumps and is a limit,
+not a law: small end suction pumps did not show the same trend. Taken at best efficiency, maximum diameter, flow per
+eye.
 """
 
 from collections.abc import Iterator
@@ -40,13 +41,14 @@ CHECK = Check(
     wordings={
         "": Wording(
             "Suction specific speed is {nss} ({basis}).",
-            "Your NPSH3 puts suction specific speed at {nss}. Please state the minimum continuous stable flow with the test or"
-            " operating data behind it.",
+            "Your NPSH3 puts suction specific speed at {nss}. Please state the minimum continuous stable flow with"
+            " the test or operating data behind it.",
         ),
         "no inducer": Wording(
-            "Suction specific speed is {nss} without an inducer ({basis}): NPSH3 is hard to believe, or the eye very large.",
-            "Your NPSH3 puts suction specific speed at {nss} without an inducer. Please send the NPSH test of this pump, and state"
-            " the minimum continuous stable flow.",
+            "Suction specific speed is {nss} without an inducer ({basis}): NPSH3 is hard to believe, or the eye very"
+            " large.",
+            "Your NPSH3 puts suction specific speed at {nss} without an inducer. Please send the NPSH test of this"
+            " pump, and state the minimum continuous stable flow.",
         ),
     },
 )

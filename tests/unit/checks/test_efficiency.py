@@ -1,0 +1,82 @@
+from dataclasses import replace
+
+import pytest
+
+from bidcheck.case import Case
+from bidcheck.checks import efficiency_ceiling, efficiency_claim
+from bidcheck.finding import Verdict
+from tests.unit.checks.judge import judge, sound_case
+
+LADDER = {
+    "expected": 0.80,
+    "sigma": 0.04,
+    "attainable": 0.87,
+    "ceiling": 0.93,
+    "implausible_above": 0.9025,
+    "remark_above": 0.849,
+    "remark_below": 0.7488,
+    "query_below": 0.72,
+    "lenient_low": False,
+    "reason": "",
+}
+
+
+def claimed(efficiency: float | None, **changes: object) -> Case:
+    case = sound_case()
+    assert case.estimates.efficiency is not None
+    estimate = replace(case.estimates.efficiency, **(LADDER | changes))
+    estimates = replace(case.estimates, efficiency=estimate, offered_efficiency=efficiency, offered_interval=0.004)
+    return replace(case, estimates=estimates)
+
+
+@pytest.mark.parametrize(
+    ("efficiency", "verdict", "word"),
+    [
+        (0.80, Verdict.PASS, "plausible"),
+        (0.849, Verdict.PASS, "plausible"),
+        (0.8491, Verdict.REMARK, "high"),
+        (0.87, Verdict.REMARK, "high"),
+        (0.8701, Verdict.QUERY, "top tenth"),
+        (0.9025, Verdict.QUERY, "top tenth"),
+        (0.9026, Verdict.QUERY, "implausible"),
+        (0.7488, Verdict.PASS, "plausible"),
+        (0.7487, Verdict.REMARK, "low"),
+        (0.72, Verdict.REMARK, "worst tenth"),
+        (0.7199, Verdict.QUERY, "very low"),
+    ],
+)
+def test_every_step_of_the_ladder(efficiency, verdict, word):
+    finding = judge(efficiency_claim.CHECK, claimed(efficiency))["best efficiency"]
+    assert finding.verdict is verdict
+    assert word in finding.wording.message
+    assert (finding.wording.question != "") is (verdict is Verdict.QUERY)
+
+
+def test_lenient_arrangements_are_never_queried_for_low_efficiency():
+    assert judge(efficiency_claim.CHECK, claimed(0.5, lenient_low=True))["best efficiency"].verdict is Verdict.REMARK
+
+
+def test_without_expected_value_only_the_high_side_is_judged():
+    none = {"expected": None, "sigma": None, "remark_above": None, "remark_below": None, "query_below": None}
+    assert judge(efficiency_claim.CHECK, claimed(0.3, **none))["best efficiency"].verdict is Verdict.PASS
+    high = judge(efficiency_claim.CHECK, claimed(0.91, **none))["best efficiency"]
+    assert high.verdict is Verdict.QUERY
+    assert "{expected}" not in high.wording.message
+
+
+def test_nothing_to_judge_is_never_a_pass():
+    refused = judge(efficiency_claim.CHECK, claimed(0.8, reason="below 6 m³/h"))["best efficiency"]
+    assert refused.verdict is Verdict.NOT_APPLICABLE
+    assert judge(efficiency_claim.CHECK, claimed(None))["best efficiency"].verdict is Verdict.NO_DATA
+
+
+@pytest.mark.parametrize(
+    ("efficiency", "verdict"), [(0.93, Verdict.PASS), (0.934, Verdict.PASS), (0.9341, Verdict.FAIL)]
+)
+def test_ceiling_is_missed_only_beyond_the_doubt_of_the_fit(efficiency, verdict):
+    assert judge(efficiency_ceiling.CHECK, claimed(efficiency))["best efficiency"].verdict is verdict
+
+
+def test_no_ceiling_is_not_a_pass():
+    finding = judge(efficiency_ceiling.CHECK, claimed(0.9, ceiling=None, reason="outside"))["best efficiency"]
+    assert finding.verdict is Verdict.NOT_APPLICABLE

@@ -1,0 +1,87 @@
+from dataclasses import replace
+
+import pytest
+
+from bidcheck.case import Case
+from bidcheck.checks import npsh_margin, suction_specific_speed
+from bidcheck.finding import Verdict
+from bidcheck.inquiry import Duty
+from bidcheck.read.limit_sets import limit_set
+from tests.build import M3H
+from tests.unit.checks.judge import judge, sound_case
+
+US = 51.645
+
+
+def at_npsh(npsh3: float | None, npsha: float | None, nss_us: float | None = 7000.0) -> Case:
+    case = sound_case()
+    rated = replace(case.operating[0][1], npsh3=npsh3, npsha=npsha)
+    estimates = replace(case.estimates, nss=None if nss_us is None else nss_us / US)
+    return replace(case, operating=(("rated", rated),), at_duty=rated, estimates=estimates)
+
+
+@pytest.mark.parametrize(
+    ("npsh3", "npsha", "nss", "verdict"),
+    [
+        (4.0, 4.6, 7500.0, Verdict.PASS),  # difference governs: 0.6 m
+        (4.0, 4.59, 7500.0, Verdict.QUERY),
+        (8.0, 8.8, 7500.0, Verdict.PASS),  # ratio governs: 1.1
+        (8.0, 8.7, 7500.0, Verdict.QUERY),
+        (4.0, 5.0, 7501.0, Verdict.PASS),  # raised: 1.0 m
+        (4.0, 4.99, 7501.0, Verdict.QUERY),
+        (8.0, 9.6, 7501.0, Verdict.PASS),  # raised: 1.2
+        (8.0, 9.5, 7501.0, Verdict.QUERY),
+        (5.0, 5.0, 7000.0, Verdict.QUERY),  # nothing left, but not below
+        (5.0, 4.99, 7000.0, Verdict.FAIL),
+        (None, 5.0, 7000.0, Verdict.NO_DATA),
+        (5.0, None, 7000.0, Verdict.NO_DATA),
+    ],
+)
+def test_margin_at_rated_flow(npsh3, npsha, nss, verdict):
+    assert judge(npsh_margin.CHECK, at_npsh(npsh3, npsha, nss))["rated"].verdict is verdict
+
+
+def test_missing_npsh3_at_rated_flow_is_decisive_missing_npsha_is_not():
+    assert judge(npsh_margin.CHECK, at_npsh(None, 5.0))["rated"].decisive
+    ours = judge(npsh_margin.CHECK, at_npsh(5.0, None))["rated"]
+    assert not ours.decisive
+    assert ours.wording.question == ""
+
+
+def test_rated_npsha_is_never_reused_at_the_largest_flow():
+    duty = Duty(rated_flow=450 * M3H, rated_head=62.0, max_flow=520 * M3H, npsha=6.8)
+    findings = judge(npsh_margin.CHECK, sound_case(duty=duty))
+    assert findings["rated"].verdict is Verdict.PASS
+    assert findings["largest flow"].verdict is Verdict.NO_DATA
+
+
+def test_process_margin_is_raised_only_outside_the_preferred_region():
+    case = at_npsh(4.0, 4.7, 11500.0)
+    inquiry = replace(case.inquiry, limits=limit_set("process"))
+    inside = replace(case.operating[0][1], flow_over_bep=0.9)
+    outside = replace(case.operating[0][1], flow_over_bep=0.6)
+    near = replace(case, inquiry=inquiry, operating=(("rated", inside),))
+    far = replace(case, inquiry=inquiry, operating=(("rated", outside),))
+    assert judge(npsh_margin.CHECK, near)["rated"].verdict is Verdict.PASS
+    assert judge(npsh_margin.CHECK, far)["rated"].verdict is Verdict.QUERY
+
+
+@pytest.mark.parametrize(
+    ("set_name", "nss", "inducer", "verdict"),
+    [
+        ("general-water", 11000.0, False, Verdict.PASS),
+        ("general-water", 11001.0, False, Verdict.REMARK),
+        ("process", 11001.0, False, Verdict.QUERY),
+        ("general-water", 13000.0, False, Verdict.REMARK),
+        ("general-water", 13001.0, False, Verdict.QUERY),
+        ("general-water", 13001.0, True, Verdict.REMARK),
+        ("process", 13001.0, False, Verdict.QUERY),
+        ("process", None, False, Verdict.NO_DATA),
+    ],
+)
+def test_suction_specific_speed(set_name, nss, inducer, verdict):
+    case = at_npsh(4.0, 9.0, nss)
+    case = replace(
+        case, inquiry=replace(case.inquiry, limits=limit_set(set_name)), bid=replace(case.bid, inducer=inducer)
+    )
+    assert judge(suction_specific_speed.CHECK, case)["best efficiency"].verdict is verdict
