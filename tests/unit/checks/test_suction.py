@@ -1,12 +1,12 @@
 from dataclasses import replace
 
 import pytest
+from bidcheck.read.limit_sets import limit_set
 
 from bidcheck.case import Case
 from bidcheck.checks import npsh_margin, suction_specific_speed
 from bidcheck.finding import Verdict
 from bidcheck.inquiry import Duty
-from bidcheck.read.limit_sets import limit_set
 from tests.build import M3H
 from tests.unit.checks.judge import judge, sound_case
 

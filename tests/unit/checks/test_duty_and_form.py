@@ -1,0 +1,93 @@
+from dataclasses import replace
+
+import pytest
+
+from bidcheck.bid import Claims
+from bidcheck.checks import curve_stability, duty_head, flow_range, specific_speed_window
+from bidcheck.finding import Verdict
+from bidcheck.inquiry import Duty
+from tests.build import M3H, points, sound_curve, stated
+from tests.unit.checks.judge import judge, sound_case
+
+
+def duty(rated_head: float = 62.0, running: int = 1) -> Duty:
+    return Duty(rated_flow=450 * M3H, rated_head=rated_head, pumps_running=running, pumps_installed=running)
+
+
+@pytest.mark.parametrize(
+    ("rated_head", "verdict"),
+    [(62.0, Verdict.PASS), (62.3, Verdict.PASS), (64.0, Verdict.QUERY), (70.0, Verdict.FAIL)],
+)
+def test_head_at_rated_flow(rated_head, verdict):
+    assert judge(duty_head.CHECK, sound_case(duty=duty(rated_head)))["rated"].verdict is verdict
+
+
+def test_head_not_reached_by_the_curve_comes_from_the_claim_or_is_no_data():
+    head = points([0, 100, 200, 300, 400], [74.0, 73.6, 71.9, 69.0, 64.9])
+    bid = {"curves": (sound_curve(head=head),)}
+    claimed = judge(duty_head.CHECK, sound_case(bid))["rated"]
+    assert claimed.verdict is Verdict.PASS
+    assert "claimed" in claimed.wording.message
+    silent = judge(duty_head.CHECK, sound_case(bid | {"claims": Claims()}))["rated"]
+    assert silent.verdict is Verdict.NO_DATA
+
+
+@pytest.mark.parametrize(
+    ("claims", "smallest", "largest"),
+    [
+        (Claims(min_continuous_flow=stated(300 * M3H, 0.0)), Verdict.PASS, Verdict.PASS),
+        (Claims(min_continuous_flow=stated(301 * M3H, 0.0)), Verdict.QUERY, Verdict.PASS),
+        (Claims(max_allowable_flow=stated(520 * M3H, 0.0)), Verdict.NO_DATA, Verdict.PASS),
+        (Claims(max_allowable_flow=stated(519 * M3H, 0.0)), Verdict.NO_DATA, Verdict.QUERY),
+    ],
+)
+def test_flow_range(claims, smallest, largest):
+    findings = judge(flow_range.CHECK, sound_case({"claims": claims}))
+    assert findings["smallest flow"].verdict is smallest
+    assert findings["largest flow"].verdict is largest
+
+
+def test_flow_range_ends_with_the_curve():
+    asked = Duty(rated_flow=450 * M3H, rated_head=62.0, max_flow=581 * M3H)
+    assert judge(flow_range.CHECK, sound_case(duty=asked))["largest flow"].verdict is Verdict.QUERY
+
+
+def drooping(shutoff: float) -> dict[str, object]:
+    flow = [0, 60, 120, 180, 240, 300, 360, 420, 480, 540, 580]
+    values = [
+        round(shutoff + (76.0 - shutoff) * (1 - (1 - q / 150) ** 2) if q < 150 else 76.0 - 1.05e-4 * (q - 150) ** 2, 1)
+        for q in flow
+    ]
+    return {"curves": (sound_curve(head=points(flow, values)),)}
+
+
+@pytest.mark.parametrize(
+    ("shutoff", "running", "verdict"),
+    [
+        (75.9, 2, Verdict.PASS),
+        (72.0, 1, Verdict.REMARK),
+        (72.0, 2, Verdict.QUERY),
+    ],
+)
+def test_droop_towards_shutoff(shutoff, running, verdict):
+    case = sound_case(drooping(shutoff), duty=duty(running=running))
+    assert judge(curve_stability.CHECK, case)["towards shutoff"].verdict is verdict
+
+
+def test_stability_without_shutoff_is_no_data():
+    head = points([200, 300, 400, 500, 560], [71.9, 69.0, 64.9, 59.5, 55.7])
+    case = sound_case({"curves": (sound_curve(head=head),)})
+    assert judge(curve_stability.CHECK, case)["towards shutoff"].verdict is Verdict.NO_DATA
+
+
+@pytest.mark.parametrize(("nq", "verdict"), [(25.0, Verdict.PASS), (6.0, Verdict.REMARK), (95.0, Verdict.REMARK)])
+def test_specific_speed_window(nq, verdict):
+    case = sound_case()
+    case = replace(case, estimates=replace(case.estimates, nq=nq))
+    assert judge(specific_speed_window.CHECK, case)["best efficiency"].verdict is verdict
+
+
+def test_specific_speed_without_best_efficiency_is_no_data():
+    case = sound_case()
+    case = replace(case, estimates=replace(case.estimates, nq=None))
+    assert judge(specific_speed_window.CHECK, case)["best efficiency"].verdict is Verdict.NO_DATA
