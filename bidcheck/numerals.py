@@ -4,7 +4,6 @@ A decimal comma is read where it can be nothing else. Thousands marks are never 
 thousand times smaller elsewhere.
 """
 
-import math
 import re
 from typing import NamedTuple
 
@@ -13,6 +12,8 @@ _NUMBER = (
 )
 _QUANTITY = re.compile(rf"\s*(?P<number>{_NUMBER})(?P<rest>.*)", re.DOTALL)
 _WHOLE = re.compile(rf"\s*(?P<number>{_NUMBER})\s*")
+_MOST_DIGITS = 30
+"""Digits of one number; a bound against mistakes (no source)."""
 _EXPONENT = re.compile(r"[eE]")
 _COMMA_OR_THOUSANDS = re.compile(r"[+-]?[1-9]\d{0,2},\d{3}")
 _GROUPS = re.compile(r"[+-]?\d{1,3}([.,])\d{3}(?:\1\d{3})+")
@@ -80,11 +81,12 @@ def read_numeral(text: str, *, comma_is_decimal: bool = False) -> Numeral:
     printed = match["number"].replace("−", "-")
     mantissa, _, exponent = _EXPONENT.sub("e", printed).partition("e")
     digits = _without_thousands_fault(mantissa, comma_is_decimal).replace(",", ".")
-    value = float(f"{digits}e{exponent or 0}")
-    if not math.isfinite(value):
+    exponent = exponent.replace("−", "-") or "0"
+    if len(exponent.lstrip("+-")) > 2 or len(digits) > _MOST_DIGITS:
         raise UnreadableNumeral("is not a number of ordinary size")
+    value = float(f"{digits}e{exponent}")
     places = len(digits.partition(".")[2])
-    return Numeral(value, 0.5 * 10.0 ** (int(exponent or 0) - places))
+    return Numeral(value, 0.5 * 10.0 ** (int(exponent) - places))
 
 
 def _without_thousands_fault(mantissa: str, comma_is_decimal: bool) -> str:

@@ -13,17 +13,7 @@ Name = Literal["flow", "head", "efficiency", "power", "npsh3"]
 COLUMN_SPELLINGS: dict[Name, tuple[str, ...]] = {
     "flow": ("flow", "Q", "capacity", "flow rate", "flowrate", "discharge", "rate of flow", "volume flow"),
     "head": ("head", "H", "TDH", "total head", "differential head", "total dynamic head", "pump head", "delivery head"),
-    "efficiency": (
-        "efficiency",
-        "eff",
-        "eta",
-        "η",
-        "pump efficiency",
-        "effy",
-        "pump eff",
-        "η pump",
-        "hydraulic efficiency",
-    ),
+    "efficiency": ("efficiency", "eff", "eta", "η", "pump efficiency", "pump eff"),
     "power": (
         "power",
         "P",
@@ -64,7 +54,7 @@ class Heading:
 
 def _plain(text: str) -> str:
     """A column name without capitals, spaces and marks."""
-    return re.sub(r"[\s_.\-()%/]", "", text.casefold())
+    return re.sub(r"[\s_.\-]", "", text.casefold())
 
 
 _BY_SPELLING: dict[str, Name] = {

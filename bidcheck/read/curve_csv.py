@@ -128,7 +128,12 @@ def _cells(headings: list[Heading], rows: list[_Row], separator: str, source: So
             source.problem(_too_many(cells, headings, separator), row.line)
             continue
         pairs = zip(headings, cells, strict=False)
-        read.append([_cell(heading, cell, row.line, separator, comma_is_decimal, source) for heading, cell in pairs])
+        read.append(
+            [
+                _cell(heading, cell, separator, comma_is_decimal=comma_is_decimal, line=row.line, source=source)
+                for heading, cell in pairs
+            ]
+        )
     return read
 
 
@@ -165,10 +170,12 @@ def _too_many(cells: list[str], headings: list[Heading], separator: str) -> str:
 
 
 def _cell(
-    heading: Heading, text: str, line: int, separator: str, comma_is_decimal: bool, source: Source
+    heading: Heading, text: str, separator: str, *, comma_is_decimal: bool, line: int, source: Source
 ) -> Cell | None:
     """One cell as a number, None where it is blank, ignored or wrong."""
     if heading.name is None or not text:
+        if text and not heading.text:
+            source.problem(f'cell "{text}" stands in a column without a heading; name the column or delete it', line)
         return None
     shown = f'{heading.name} "{text}"'
     if separator == "," and _DECIMAL_COMMA.fullmatch(text):

@@ -43,7 +43,7 @@ def read_points(headings: list[Heading], rows: Rows, source: Source) -> dict[Col
         given = [(flow, value) for flow, value in pairs if flow is not None and value is not None]
         if column == "efficiency":
             _check_efficiency(heading, [value for _, value in given], source)
-        pairs_of[column] = _in_order(column, given, source)
+        pairs_of[column] = _in_order(column, given, flow_heading.unit or "", source)
     if not source.problems and not any(pairs_of.values()):
         source.problem("has no figures beneath its header")
     points: dict[Column, Points] = {}
@@ -65,7 +65,7 @@ def _check_flow(row: Sequence[Cell | None], flow: int, source: Source) -> None:
 
 
 def _check_efficiency(heading: Heading, cells: list[Cell], source: Source) -> None:
-    """Above 100 % is impossible; per cent that never exceed 1 are fractions under a wrong heading, or almost nothing."""
+    """Above 100 % is impossible; per cent that never exceed 1 are probably fractions under a wrong heading."""
     unit = heading.unit or ""
     above = [cell for cell in cells if to_si(cell.value, unit, Kind.SHARE) > 1.0]
     if above and to_si(1.0, unit, Kind.SHARE) == 1.0:
@@ -83,12 +83,15 @@ def _check_efficiency(heading: Heading, cells: list[Cell], source: Source) -> No
         source.problem(f'{text}if these are fractions, write "efficiency [fraction]"', cells[0].line)
 
 
-def _in_order(column: Column, given: list[tuple[Cell, Cell]], source: Source) -> list[tuple[Cell, Cell]]:
+def _in_order(
+    column: Column, given: list[tuple[Cell, Cell]], flow_unit: str, source: Source
+) -> list[tuple[Cell, Cell]]:
     """Rows by flow; equal flows with equal values collapse, with different values are an error."""
     ordered = sorted(given, key=lambda pair: (pair[0].value, pair[0].line))
     kept: list[tuple[Cell, Cell]] = []
     for flow, value in ordered:
-        if not kept or flow.value != kept[-1][0].value:
+        same = kept and to_si(flow.value, flow_unit, Kind.FLOW) == to_si(kept[-1][0].value, flow_unit, Kind.FLOW)
+        if not same:
             kept.append((flow, value))
             continue
         first = kept[-1][1]

@@ -1,6 +1,7 @@
 """inquiry.toml to an Inquiry without its bids."""
 
 from collections.abc import Sequence
+from typing import Any
 
 from bidcheck.inquiry import (
     DensityCase,
@@ -37,7 +38,7 @@ def read_inquiry_table(top: Table) -> Inquiry | None:
     duty, liquid = _duty(top.table("duty")), read_liquid(top.table("liquid"))
     inquiry_limits = top.table("limits")
     limits = read_overrides(inquiry_limits, limit_set(_set_name(inquiry_limits)))
-    parts = {
+    parts: dict[str, Any] = {
         "suction": _suction(top),
         "system": _system(top),
         "site": _site(top.table("site")),
@@ -58,7 +59,7 @@ def read_inquiry_table(top: Table) -> Inquiry | None:
         liquid=liquid,
         limits=limits,
         assumptions=tuple(source.assumptions),
-        **parts,  # type: ignore[arg-type]
+        **parts,
     )
 
 
@@ -67,8 +68,8 @@ def _duty(table: Table) -> Duty | None:
     table.require("rated_flow", '"450 m3/h"')
     table.require("rated_head", '"62 m"')
     rated, head = table.figure("rated_flow", Kind.FLOW), table.figure("rated_head", Kind.HEAD)
-    flows = {key: table.figure(key, Kind.FLOW) for key in ("min_flow", "normal_flow", "max_flow")}
-    npsha = {key: table.figure(key, Kind.NPSH) for key in ("npsha", "npsha_at_max_flow")}
+    flows: dict[str, Any] = {key: table.figure(key, Kind.FLOW) for key in ("min_flow", "normal_flow", "max_flow")}
+    npsha: dict[str, Any] = {key: table.figure(key, Kind.NPSH) for key in ("npsha", "npsha_at_max_flow")}
     running, installed = table.count("pumps_running"), table.count("pumps_installed")
     _check_order(table, {"rated_flow": rated, **flows})
     if running is not None and installed is not None and running > installed:
@@ -79,8 +80,8 @@ def _duty(table: Table) -> Duty | None:
         table.source.assume("pumps installed", str(running or 1), "not given; no stand-by pump")
     if rated is None or head is None:
         return None
-    pumps = {"pumps_running": running or 1, "pumps_installed": installed or running or 1}
-    return Duty(rated_flow=rated, rated_head=head, **flows, **npsha, **pumps)  # type: ignore[arg-type]
+    pumps: dict[str, Any] = {"pumps_running": running or 1, "pumps_installed": installed or running or 1}
+    return Duty(rated_flow=rated, rated_head=head, **flows, **npsha, **pumps)
 
 
 def _check_order(table: Table, flows: dict[str, float | None]) -> None:

@@ -72,18 +72,19 @@ def read_text(path: Path, file: str, inputs: list[InputFile]) -> str:
 
 def _read_bytes(path: Path, file: str) -> bytes:
     """Bytes of a file of bounded size."""
-    if path.is_dir():
-        raise InputError([Problem(file, "is a folder, a file is needed")])
-    if not path.is_file():
-        raise InputError([Problem(file, "there is no such file")])
     try:
+        if path.is_dir():
+            raise InputError([Problem(file, "is a folder, a file is needed")])
+        if not path.is_file():
+            raise InputError([Problem(file, "there is no such file")])
         size = path.stat().st_size
         if size > LARGEST_FILE:
             text = f"has {size / 1e6:.1f} MB, more than the {LARGEST_FILE / 1e6:.0f} MB read; is it the right file?"
             raise InputError([Problem(file, text)])
         return path.read_bytes()
-    except OSError as error:
-        raise InputError([Problem(file, f"cannot be opened: {error.strerror}")]) from None
+    except (OSError, ValueError) as error:
+        reason = (error.strerror if isinstance(error, OSError) else None) or "its name cannot be used"
+        raise InputError([Problem(file, f"cannot be opened: {reason}")]) from None
 
 
 def decode(data: bytes, file: str) -> str:
