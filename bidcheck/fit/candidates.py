@@ -6,6 +6,7 @@ nothing is fitted. Ranges of degree: common practice, no source.
 """
 
 from dataclasses import dataclass
+from functools import lru_cache
 
 import numpy as np
 
@@ -14,6 +15,7 @@ from bidcheck.fit.least_squares import Factors, factorise, nested_solutions
 
 DEGREES: dict[Column, tuple[int, int]] = {"head": (2, 5), "efficiency": (2, 5), "power": (1, 4), "npsh3": (1, 3)}
 """Lowest and highest degree per column; common practice, no source."""
+HIGHEST = max(highest for _, highest in DEGREES.values())
 FEWEST_POINTS = 3
 """A line needs one point more than its two coefficients to leave a residual."""
 
@@ -37,6 +39,8 @@ class Candidates:
     leverage : array, shape (n, d)
     unit_covariance_root : array, shape (highest + 1, m)
         Its first `parameters` columns times their transpose are the covariance for unit variance.
+    rounding_variance : float
+        Mean variance that printing to the last digit leaves: half digit squared over 3 (uniform).
     """
 
     column: Column
@@ -51,11 +55,7 @@ class Candidates:
     left_out: Floats
     leverage: Floats
     unit_covariance_root: Floats
-
-    @property
-    def rounding_variance(self) -> float:
-        """Mean variance that printing to the last digit leaves: half digit squared over 3 (uniform)."""
-        return float(self.value_half_digit @ self.value_half_digit) / (3.0 * len(self.flow))
+    rounding_variance: float
 
     def freedom(self, k: int) -> int:
         """Degrees of freedom candidate `k` leaves."""
@@ -132,24 +132,38 @@ def candidates(points: Points, column: Column) -> Candidates | None:
     domain = (float(points.flow[0]), float(points.flow[-1]))
     start = 1 if column == "efficiency" and domain[0] == 0.0 else 0
     flow, value, half = points.flow[start:], points.value[start:], points.value_half_digit[start:]
-    factors, root = _factors(scaled_flow(flow, domain), domain, highest, column == "efficiency")
-    drop = highest + 1 - root.shape[0]
-    highest -= drop
+    factors, root = _factors(flow.tobytes(), domain, min(HIGHEST, n - 2), column == "efficiency")
+    highest = min(highest, root.shape[0] - 1)
     lowest = min(lowest, highest)
-    first = lowest if column != "efficiency" else lowest - 1
-    _, residuals = nested_solutions(factors, value)
-    # the root applied to qᵀy gives the coefficients in u directly, also where the fit is held at zero
-    coefficients = np.cumsum(root * (factors.q.T @ value), axis=1)
-    leverage = factors.leverage[:, first:]
+    shape = root.shape[1] - root.shape[0]  # 0, or -1 where the fit is held at zero
+    first, last = lowest + shape, highest + 1 + shape
+    coefficients, residuals = nested_solutions(factors, root, value)
+    residuals, leverage = residuals[:, first:last], factors.leverage[:, first:last]
+    left_out = residuals / np.maximum(1.0 - leverage, 1e-12)
     return Candidates(
-        column, flow, value, half, domain, lowest, tuple(range(first + 1, residuals.shape[1] + 1)),
-        coefficients[:, first:], residuals[:, first:],
-        residuals[:, first:] / np.maximum(1.0 - leverage, 1e-12), leverage, root,
-    )  # fmt: skip
+        column=column,
+        flow=flow,
+        value=value,
+        value_half_digit=half,
+        domain=domain,
+        lowest=lowest,
+        parameters=tuple(range(first + 1, last + 1)),
+        coefficients=coefficients[: highest + 1, first:last],
+        residuals=residuals,
+        left_out=left_out,
+        leverage=leverage,
+        unit_covariance_root=root,
+        rounding_variance=float(half @ half) / (3.0 * len(half)),
+    )
 
 
-def _factors(u: Floats, domain: tuple[float, float], degree: int, through_zero: bool) -> tuple[Factors, Floats]:
-    """Factorised design in u, and the matrix from qᵀy to coefficients in u, shape (degree + 1, columns)."""
+@lru_cache(maxsize=8)
+def _factors(flow: bytes, domain: tuple[float, float], degree: int, through_zero: bool) -> tuple[Factors, Floats]:
+    """Factorised design in u, and the matrix from qᵀy to coefficients in u, shape (degree + 1, columns).
+
+    Kept for a few sets of flows, since the columns of one curve mostly share theirs.
+    """
+    u = scaled_flow(np.frombuffer(flow), domain)
     if not through_zero:
         factors = factorise(u[:, None] ** np.arange(degree + 1))
         return factors, factors.inverse

@@ -30,7 +30,8 @@ def derived_points(head: Points, other: Points, density: float, wanted: Column) 
 
     Notes
     -----
-    P = ρ g Q H/η. Valid for head and power stated for the same stages, power at the pump shaft.
+    P = ρ g Q H/η. Valid for head and power stated for the same stages, power at the pump shaft. A derived
+    efficiency above 1 is returned as it is: it shows that the figures contradict each other.
     Source: ISO 17769-1:2012, pump power output and pump efficiency.
 
     Examples
@@ -54,6 +55,4 @@ def derived_points(head: Points, other: Points, density: float, wanted: Column) 
         + (head.value_half_digit[at_head] / lift) ** 2
         + (other.value_half_digit[at_other] / divisor) ** 2
     )
-    if wanted == "efficiency" and (value > 1.0).any():
-        return None  # no efficiency: power and head are not on one basis
     return Points(flow, value, flow_half, share * value, np.zeros(len(flow), dtype=np.int64))

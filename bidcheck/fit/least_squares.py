@@ -86,32 +86,34 @@ def factorise(design: Floats) -> Factors:
     return Factors(q, inverse, np.cumsum(q * q, axis=1))
 
 
-def nested_solutions(factors: Factors, values: Floats) -> tuple[Floats, Floats]:
+def nested_solutions(factors: Factors, root: Floats, values: Floats) -> tuple[Floats, Floats]:
     """Solve for the first column alone, the first two, and so on, in one pass.
 
     Parameters
     ----------
     factors : Factors
         Of a design with n rows and m columns.
+    root : array, shape (p, m)
+        Takes qᵀy to the coefficients wanted: `factors.inverse`, or a matrix times it.
     values : array, shape (n,)
         Right-hand side.
 
     Returns
     -------
-    coefficients : array, shape (m, m)
-        Column k - 1: coefficients of the first k columns, zeros below.
+    coefficients : array, shape (p, m)
+        Column k - 1: coefficients of the first k columns.
     residuals : array, shape (n, m)
         Column k - 1: values minus fit of the first k columns.
 
     Examples
     --------
-    >>> design = np.array([[1.0, -1.0], [1.0, 0.0], [1.0, 1.0]])
-    >>> nested_solutions(factorise(design), np.array([1.0, 2.0, 6.0]))[0]
+    >>> factors = factorise(np.array([[1.0, -1.0], [1.0, 0.0], [1.0, 1.0]]))
+    >>> nested_solutions(factors, factors.inverse, np.array([1.0, 2.0, 6.0]))[0]
     array([[3. , 3. ],
            [0. , 2.5]])
     """
     projection = factors.q.T @ values
-    coefficients = np.cumsum(factors.inverse * projection, axis=1)
+    coefficients = np.cumsum(root * projection, axis=1)
     residuals = values[:, None] - np.cumsum(factors.q * projection, axis=1)
     return coefficients, residuals
 

@@ -17,6 +17,8 @@ END_FLOOR = 0.1
 """As `FLOOR`, for the first and the last point, which are held against extrapolation; common practice, no source."""
 SEEN = 0.25
 """Share of a displaced point's jumps of slope that must show at it and its neighbours; common practice, no source."""
+FEWEST_POINTS = 6
+"""A cubic and two points more; with fewer points nothing is called odd."""
 MANY_POINTS = 10
 """From so many points on two odd points per column are looked for, else one; common practice, no source."""
 
@@ -49,7 +51,8 @@ def odd_points(points: Points, column: Column) -> tuple[tuple[OddPoint, ...], Po
 
     Notes
     -----
-    Valid for 6 points and more; with fewer nothing is found, since the freedom left proves nothing.
+    Valid for 6 points and more; with fewer nothing is found, since the freedom left proves nothing. An efficiency
+    stated at zero flow is odd with any number of points, if it differs from zero by more than 1 % of the largest.
     A point is odd if its externally studentised residual exceeds Student's t at 1 % spread over all points of four
     columns (Bonferroni) and its distance from the curve through the others exceeds 1 % of the curve's largest value.
     The degree is that chosen without the point; every higher degree with freedom left and the cubic through the four
@@ -68,11 +71,20 @@ def odd_points(points: Points, column: Column) -> tuple[tuple[OddPoint, ...], Po
     >>> odd[0].line, round(odd[0].would_fit, 1), len(others)
     (6, 44.9, 8)
     """
+    odd, others, _ = set_apart(points, column)
+    return odd, others
+
+
+def set_apart(points: Points, column: Column) -> tuple[tuple[OddPoint, ...], Points, Candidates | None]:
+    """Odd points, the others, and the candidate fits through those."""
     found: list[OddPoint] = []
     most = 2 if len(points) >= MANY_POINTS else 1
-    while len(found) < most:
-        fits = candidates(points, column)
-        suspect = _most_suspect(points, fits) if fits is not None else None
+    at_rest = _efficiency_at_rest(points) if column == "efficiency" else None
+    if at_rest is not None:
+        found, points = [at_rest], without(points, 0)
+    fits = candidates(points, column)
+    while fits is not None and len(found) < most and len(points) >= FEWEST_POINTS:
+        suspect = _most_suspect(points, fits)
         if suspect is None:
             break
         i = suspect.index
@@ -82,8 +94,16 @@ def odd_points(points: Points, column: Column) -> tuple[tuple[OddPoint, ...], Po
         found.append(
             OddPoint(column, int(points.line[i]), float(points.flow[i]), value, value - suspect.deviation, share)
         )
-        points = others
-    return tuple(sorted(found, key=lambda odd: odd.flow)), points
+        points, fits = others, candidates(others, column)
+    return tuple(sorted(found, key=lambda odd: odd.flow)), points, fits
+
+
+def _efficiency_at_rest(points: Points) -> OddPoint | None:
+    """The point at zero flow if it claims an efficiency there, where none can be."""
+    value, largest = float(points.value[0]), float(np.abs(points.value).max())
+    if points.flow[0] != 0.0 or abs(value) <= max(FLOOR * largest, float(points.value_half_digit[0])):
+        return None
+    return OddPoint("efficiency", int(points.line[0]), 0.0, value, 0.0, value / largest)
 
 
 def _most_suspect(points: Points, fits: Candidates) -> _Suspect | None:
@@ -105,14 +125,10 @@ def _scores(fits: Candidates) -> Floats:
     unexplained = np.maximum(1.0 - fits.leverage, 1e-12)
     squares = fits.residuals**2
     rest = squares.sum(axis=0) - squares / unexplained
-    score = np.zeros_like(squares)
-    for k, parameters in enumerate(fits.parameters):
-        freedom = n - 1 - parameters
-        if freedom < 1:
-            continue
-        bound = student_quantile(1.0 - RISK / (len(COLUMNS) * n), freedom)
-        deviation = np.sqrt(np.maximum(rest[:, k] / freedom, fits.rounding_variance))
-        score[:, k] = np.abs(fits.residuals[:, k]) / np.sqrt(unexplained[:, k]) / deviation / bound
+    freedom = [n - 1 - parameters for parameters in fits.parameters]
+    bound = [student_quantile(1.0 - RISK / (len(COLUMNS) * n), nu) if nu > 0 else np.inf for nu in freedom]
+    variance = np.maximum(rest / np.maximum(freedom, 1), fits.rounding_variance)
+    score: Floats = np.sqrt(squares / (unexplained * variance)) / bound
     return score
 
 

@@ -9,7 +9,7 @@ from bidcheck.fit.column import as_fit
 from bidcheck.fit.degree import choose_degree
 from bidcheck.fit.derived_columns import derived_points
 from bidcheck.fit.guard import guard
-from bidcheck.fit.odd_points import odd_points
+from bidcheck.fit.odd_points import set_apart
 
 
 @dataclass(frozen=True, eq=False, slots=True)
@@ -62,9 +62,9 @@ def fit_curve(curve: Curve, check_flow: float | None = None) -> Fits:
     power = _fit_stated(curve.power, "power", odd)
     npsh3 = _fit_stated(curve.npsh3, "npsh3", odd)
     if head is not None and curve.power_at == "shaft":
-        if curve.power is None and efficiency is not None:
+        if power is None and efficiency is not None:
             power = _fit_derived(derived_points(head.points, efficiency.points, curve.density, "power"), "power")
-        elif curve.efficiency is None and power is not None:
+        elif efficiency is None and power is not None:
             points = derived_points(head.points, power.points, curve.density, "efficiency")
             efficiency = _fit_derived(points, "efficiency")
     bep, beyond = None, None
@@ -87,21 +87,19 @@ def _fit_stated(points: Points | None, column: Column, odd: list[OddPoint]) -> _
     """Fit a column as supplied; odd points are appended to `odd` and left out."""
     if points is None:
         return None
-    found, others = odd_points(points, column)
+    found, others, fits = set_apart(points, column)
     odd.extend(found)
-    return _fit(others, column, derived=False)
+    return None if fits is None else _fit(others, fits, derived=False)
 
 
 def _fit_derived(points: Points | None, column: Column) -> _Fitted | None:
     """Fit a derived column; what is odd in it was found in the columns it comes from."""
-    return None if points is None else _fit(points, column, derived=True)
+    fits = None if points is None else candidates(points, column)
+    return None if points is None or fits is None else _fit(points, fits, derived=True)
 
 
-def _fit(points: Points, column: Column, derived: bool) -> _Fitted | None:
-    """Fit a column, every point of it."""
-    fits = candidates(points, column)
-    if fits is None:
-        return None
+def _fit(points: Points, fits: Candidates, derived: bool) -> _Fitted:
+    """Choose among the candidate fits of a column."""
     chosen, shapes = choose_degree(fits)
     return _Fitted(points, fits, chosen, shapes, as_fit(fits, chosen, derived))
 
