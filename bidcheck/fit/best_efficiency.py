@@ -116,7 +116,7 @@ def best_efficiency(
 
 def _contenders(fits: Candidates, shapes: list[bool]) -> list[int]:
     """Candidates that describe the points about as well as the best."""
-    errors = np.sqrt((fits.left_out**2).mean(axis=0)).tolist()
+    errors = np.sqrt(fits.squared_errors.mean(axis=0)).tolist()
     usable = [k for k, allowed in enumerate(shapes) if allowed]
     bar = CONTENDER * max(min((errors[k] for k in usable), default=0.0), fits.rounding_variance**0.5)
     return [k for k in usable if errors[k] <= bar]

@@ -57,6 +57,16 @@ class Candidates:
     unit_covariance_root: Floats
     rounding_variance: float
 
+    @property
+    def squared_errors(self) -> Floats:
+        """Squared leave-one-out residuals of the points that have neighbours on both sides, shape (inner points, d).
+
+        Leaving an end out asks for extrapolation, which is never done with a fit. Efficiency has its zero before
+        the first point.
+        """
+        inner: Floats = self.left_out[0 if self.column == "efficiency" else 1 : -1] ** 2
+        return inner
+
     def freedom(self, k: int) -> int:
         """Degrees of freedom candidate `k` leaves."""
         return len(self.flow) - self.parameters[k]

@@ -105,18 +105,20 @@ def choose_degree(fits: Candidates) -> tuple[int, list[bool]]:
 
     Notes
     -----
-    The standard error is that of the mean of the squared leave-one-out residuals of the best degree, and no smaller
-    than the variance of rounding, so that no degree is spent on printed digits.
+    The error is the mean of squared leave-one-out residuals over points with neighbours on both sides: leaving an end
+    out asks for extrapolation, which is never done with a fit, and would decide alone. The standard error is that of
+    this mean for the best degree, no smaller than the variance of rounding, so that no degree is spent on printed
+    digits.
     Source: Allen (1974), Technometrics 16, 125-127 (the error); Breiman, Friedman, Olshen and Stone (1984),
     Classification and Regression Trees, 3.4.3 (one standard error).
     """
     shapes = shapes_allowed(fits)
-    squares = fits.left_out**2
+    squares = fits.squared_errors
     means = squares.mean(axis=0).tolist()
     usable = [k for k, allowed in enumerate(shapes) if allowed]
     if not usable:
         return 0, shapes
     best = min(usable, key=means.__getitem__)
-    spread = float(squares[:, best].std(ddof=1)) / len(squares) ** 0.5
+    spread = float(squares[:, best].std(ddof=1)) / len(squares) ** 0.5 if len(squares) > 1 else 0.0
     bar = means[best] + max(spread, fits.rounding_variance)
     return next(k for k in usable if means[k] <= bar), shapes

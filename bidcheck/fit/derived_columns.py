@@ -2,25 +2,25 @@
 
 import numpy as np
 
-from bidcheck.curve import Column, Floats, Points
+from bidcheck.curve import Floats, Points
 
 STANDARD_GRAVITY = 9.80665
 """Standard acceleration of free fall [m/s²]; 3rd General Conference on Weights and Measures, 1901."""
 
 
-def derived_points(head: Points, other: Points, density: float, wanted: Column) -> Points | None:
+def derived_points(head: Points, other: Points, density: float) -> Points | None:
     """Points of power from efficiency, or of efficiency from power, at the flows where head is given too.
+
+    One formula serves both: ρ g Q H over the one is the other.
 
     Parameters
     ----------
     head : Points
         Flow and head. [m³/s, m]
     other : Points
-        Efficiency where power is wanted, power where efficiency is wanted. [fraction or W]
+        Efficiency, to derive power; or power, to derive efficiency. [fraction or W]
     density : float
         Of the liquid the power is given for. [kg/m³]
-    wanted : {"power", "efficiency"}
-        Which to derive.
 
     Returns
     -------
@@ -39,7 +39,7 @@ def derived_points(head: Points, other: Points, density: float, wanted: Column) 
     >>> one, q = np.array([1.0]), np.array([0.1])
     >>> head = Points(q, 50 * one, 0 * one, 0.05 * one, np.array([2]))
     >>> efficiency = Points(q, 0.8 * one, 0 * one, 0.0005 * one, np.array([2]))
-    >>> derived_points(head, efficiency, 1000.0, "power").value
+    >>> derived_points(head, efficiency, 1000.0).value
     array([61291.6])
     """
     _, at_head, at_other = np.intersect1d(head.flow, other.flow, assume_unique=True, return_indices=True)

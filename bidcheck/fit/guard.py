@@ -60,7 +60,8 @@ def guard(points: Points, fit: Fit, flow: float) -> Fit:
     -------
     Fit
         With `guard_flow` and `guard_difference` (interpolation less fit) filled where the fit is in doubt and the
-        difference exceeds twice the scatter of the points, rounding included; else the fit as it was.
+        difference exceeds twice the scatter of the points, rounding included, or 2 % of their range where the
+        scatter itself is larger; else the fit as it was.
 
     Notes
     -----
@@ -83,6 +84,7 @@ def guard(points: Points, fit: Fit, flow: float) -> Fit:
     inside = min(max(flow, fit.domain[0]), fit.domain[1])
     difference = float(PchipInterpolator(points.flow, points.value)(inside)) - float(fit.polynomial(inside))
     rounding = float((points.value_half_digit**2).mean() / 3.0) ** 0.5
-    if abs(difference) <= NOISE_FACTOR * max(fit.rms, rounding):
+    large = LARGE_RESIDUAL * float(points.value.max() - points.value.min())
+    if abs(difference) <= max(NOISE_FACTOR * rounding, min(NOISE_FACTOR * fit.rms, large)):
         return fit
     return replace(fit, guard_flow=flow, guard_difference=difference)

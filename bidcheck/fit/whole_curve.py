@@ -36,7 +36,7 @@ def fit_curve(curve: Curve, check_flow: float | None = None) -> Fits:
     Returns
     -------
     Fits
-        Odd points are left out of the fits and listed. Power missing from a curve is derived from efficiency, and
+        Odd points are left out of the fits and listed; a fit without its first or last point ends at the next. Power missing from a curve is derived from efficiency, and
         efficiency from power, where head is given and power is meant at the shaft; such fits are marked derived. A
         column with fewer than 3 points has no fit.
 
@@ -63,9 +63,9 @@ def fit_curve(curve: Curve, check_flow: float | None = None) -> Fits:
     npsh3 = _fit_stated(curve.npsh3, "npsh3", odd)
     if head is not None and curve.power_at == "shaft":
         if power is None and efficiency is not None:
-            power = _fit_derived(derived_points(head.points, efficiency.points, curve.density, "power"), "power")
+            power = _fit_derived(derived_points(head.points, efficiency.points, curve.density), "power")
         elif efficiency is None and power is not None:
-            points = derived_points(head.points, power.points, curve.density, "efficiency")
+            points = derived_points(head.points, power.points, curve.density)
             efficiency = _fit_derived(points, "efficiency")
     bep, beyond = None, None
     if efficiency is not None:

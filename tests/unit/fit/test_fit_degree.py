@@ -70,8 +70,7 @@ def test_a_curve_that_turns_where_its_points_do_not_is_refused():
 
 
 def test_all_shapes_refused_keeps_the_lowest_degree():
-    flow = [0, 10, 20, 100, 110, 120]
-    fits = candidates(points(flow, [60.0, 59.9, 59.8, 30.0, 29.9, 29.8], half_digit=0.005), "head")
+    fits = candidates(points(np.arange(7) * 20, [100.0, 10.0, 5.0, 3.0, 2.9, 2.8, 2.7]), "head")
     chosen, shapes = choose_degree(fits)
     assert not any(shapes)
     assert chosen == 0

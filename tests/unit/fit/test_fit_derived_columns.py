@@ -10,7 +10,7 @@ from tests.build import points, sound_curve
 def test_derived_power_at_common_flows_above_zero():
     head = points([0, 100, 200, 300], [50, 48, 44, 38])
     efficiency = points([0, 100, 250, 300], [0, 60, 75, 70], 0.01)
-    power = derived_points(head, efficiency, 1000.0, "power")
+    power = derived_points(head, efficiency, 1000.0)
     np.testing.assert_allclose(power.flow * 3600, [100, 300])
     assert power.value[0] == pytest.approx(1000 * 9.80665 * 100 / 3600 * 48 / 0.6)
     assert power.line.tolist() == [0, 0]
@@ -20,13 +20,13 @@ def test_derived_power_at_common_flows_above_zero():
 
 def test_there_and_back():
     curve = sound_curve()
-    power = derived_points(curve.head, curve.efficiency, 998.2, "power")
-    efficiency = derived_points(curve.head, power, 998.2, "efficiency")
+    power = derived_points(curve.head, curve.efficiency, 998.2)
+    efficiency = derived_points(curve.head, power, 998.2)
     np.testing.assert_allclose(efficiency.value, curve.efficiency.value[1:])
 
 
 def test_nothing_in_common():
-    assert derived_points(points([0, 10], [5, 4]), points([5, 15], [0.5, 0.6]), 1000.0, "power") is None
+    assert derived_points(points([0, 10], [5, 4]), points([5, 15], [0.5, 0.6]), 1000.0) is None
 
 
 @pytest.mark.parametrize(("missing", "there"), [("power", "efficiency"), ("efficiency", "power")])

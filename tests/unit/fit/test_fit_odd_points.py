@@ -23,7 +23,7 @@ def test_a_mistyped_head_is_found_and_told_what_would_fit(index, factor):
 
 @pytest.mark.parametrize(("offset", "count"), [(0.4, 0), (0.6, 1)])
 def test_one_per_cent_of_the_largest_value_is_the_floor(offset, count):
-    head = 50 - 0.0008 * FLOW**2
+    head = 50 - 0.0002 * FLOW**2
     head[4] += offset
     odd, _ = odd_points(points(FLOW, head, half_digit=0.005), "head")
     assert len(odd) == count
