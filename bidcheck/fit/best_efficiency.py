@@ -36,7 +36,7 @@ def find_peak(coefficients: list[float], k: int) -> Peak:
         low, high = (u, high) if here > 0.0 else (low, u)
         step = u - here / bend if bend < 0.0 else low
         following = step if low < step < high else 0.5 * (low + high)
-        if abs(following - u) < 1e-14:
+        if abs(following - u) < 1e-12:
             break
         u = following
     return Peak(u, "inside")

@@ -36,9 +36,9 @@ def fit_curve(curve: Curve, check_flow: float | None = None) -> Fits:
     Returns
     -------
     Fits
-        Odd points are left out of the fits and listed; a fit without its first or last point ends at the next. Power missing from a curve is derived from efficiency, and
-        efficiency from power, where head is given and power is meant at the shaft; such fits are marked derived. A
-        column with fewer than 3 points has no fit.
+        Odd points are left out of the fits and listed; a fit without its first or last point ends at the next. Power
+        missing from a curve is derived from efficiency, and efficiency from power, where head is given and power is
+        meant at the shaft; such fits are marked derived. A column with fewer than 3 points has no fit.
 
     Notes
     -----

@@ -60,6 +60,16 @@ def test_two_odd_points_only_among_ten(n, count):
     assert len(others) == n - len(odd)
 
 
+@pytest.mark.parametrize("distance", [3, 4, 5])
+def test_two_odd_points_do_not_hide_each_other(distance):
+    flow = np.linspace(0, 160, 14)
+    value = np.round(50 - 0.0008 * flow**2, 1)
+    value[3] += 6
+    value[3 + distance] -= 5
+    odd, _ = odd_points(points(flow, value), "head")
+    assert [point.line for point in odd] == [5, 5 + distance]
+
+
 @pytest.mark.parametrize("n", [3, 4, 5])
 def test_few_points_prove_nothing(n):
     flow = np.linspace(0, 160, n)
