@@ -136,15 +136,11 @@ def candidates(points: Points, column: Column) -> Candidates | None:
     n = len(points)
     if n < FEWEST_POINTS:
         return None
-    lowest, highest = DEGREES[column]
-    highest = min(highest, n - 2)
-    lowest = min(lowest, highest)
     domain = (float(points.flow[0]), float(points.flow[-1]))
     start = 1 if column == "efficiency" and domain[0] == 0.0 else 0
     flow, value, half = points.flow[start:], points.value[start:], points.value_half_digit[start:]
     factors, root = _factors(flow.tobytes(), domain, min(HIGHEST, n - 2), column == "efficiency")
-    highest = min(highest, root.shape[0] - 1)
-    lowest = min(lowest, highest)
+    lowest, highest = (min(degree, n - 2, root.shape[0] - 1) for degree in DEGREES[column])
     shape = root.shape[1] - root.shape[0]  # 0, or -1 where the fit is held at zero
     first, last = lowest + shape, highest + 1 + shape
     coefficients, residuals = nested_solutions(factors, root, value)
