@@ -4,10 +4,11 @@ Absolute and gauge pressure are never guessed: a field that needs an absolute pr
 currency of money is kept beside the number, not converted.
 """
 
+import math
 import re
 from difflib import get_close_matches
 from functools import cache, lru_cache
-from typing import TYPE_CHECKING
+from typing import TYPE_CHECKING, NamedTuple
 
 from bidcheck.errors import UnitError
 from bidcheck.numerals import Numeral, UnreadableNumeral, read_numeral, split_quantity
@@ -30,17 +31,28 @@ def _registry() -> "pint.UnitRegistry[float]":
     return pint.UnitRegistry()
 
 
+class _Scale(NamedTuple):
+    """SI = value * factor / divisor + offset; a whole divisor keeps 450 m3/h at 0.125 m³/s."""
+
+    factor: float
+    divisor: float
+    offset: float
+
+
 @cache
-def _scale(expression: str, si: str) -> tuple[float, float]:
-    """Factor and offset from a pint expression to SI: si = factor * value + offset."""
+def _scale(expression: str, si: str) -> _Scale:
+    """Scale from a pint expression to SI."""
     if expression == si:
-        return 1.0, 0.0
+        return _Scale(1.0, 1.0, 0.0)
     registry = _registry()
     if expression in ("degC", "degF"):
-        zero, one = (float(registry.Quantity(value, expression).to(si).magnitude) for value in (0.0, 100.0))
-        return (one - zero) / 100.0, zero
+        zero, hundred = (float(registry.Quantity(value, expression).to(si).magnitude) for value in (0.0, 100.0))
+        return _Scale(float(f"{hundred - zero:.12g}"), 100.0, zero)
     factor = float((1.0 * registry.parse_expression(expression)).to(si).magnitude)
-    return float(f"{factor:.15g}"), 0.0
+    divisor = round(1.0 / factor)
+    if divisor > 0 and math.isclose(factor * divisor, 1.0, rel_tol=1e-14):
+        return _Scale(1.0, float(divisor), 0.0)
+    return _Scale(float(f"{factor:.15g}"), 1.0, 0.0)
 
 
 def _plain(spelling: str) -> str:
@@ -107,8 +119,8 @@ def to_si(value: float, spelling: str, kind: Kind) -> float:
     >>> to_si(68.0, "°F", Kind.TEMPERATURE)
     293.15
     """
-    factor, offset = _scale_of(spelling, kind)
-    return factor * value + offset
+    factor, divisor, offset = _scale_of(spelling, kind)
+    return value * factor / divisor + offset
 
 
 def from_si(value: float, spelling: str, kind: Kind) -> float:
@@ -119,12 +131,12 @@ def from_si(value: float, spelling: str, kind: Kind) -> float:
     >>> from_si(0.125, "m³/h", Kind.FLOW)
     450.0
     """
-    factor, offset = _scale_of(spelling, kind)
-    return (value - offset) / factor
+    factor, divisor, offset = _scale_of(spelling, kind)
+    return (value - offset) * divisor / factor
 
 
-def _scale_of(spelling: str, kind: Kind) -> tuple[float, float]:
-    """Factor and offset of a spelling, or a UnitError."""
+def _scale_of(spelling: str, kind: Kind) -> _Scale:
+    """Scale of a spelling, or a UnitError."""
     expression = _expression(spelling, kind)
     if expression is None:
         raise UnitError(unknown_unit(spelling, kind))
@@ -133,7 +145,8 @@ def _scale_of(spelling: str, kind: Kind) -> tuple[float, float]:
 
 def half_digit_to_si(half_digit: float, spelling: str, kind: Kind) -> float:
     """Convert a difference, so without the offset of a temperature scale."""
-    return abs(_scale_of(spelling, kind)[0]) * half_digit
+    factor, divisor, _ = _scale_of(spelling, kind)
+    return half_digit * factor / divisor
 
 
 def unknown_unit(spelling: str, kind: Kind) -> str:
@@ -141,8 +154,8 @@ def unknown_unit(spelling: str, kind: Kind) -> str:
 
     Examples
     --------
-    >>> unknown_unit("m3/hr", Kind.FLOW)
-    'unit "m3/hr" is not known for flow; nearest is "m3/h"'
+    >>> unknown_unit("kWatt", Kind.POWER)
+    'unit "kWatt" is not known for power; nearest is "kW"'
     """
     known = spellings(kind)
     elsewhere = next(
@@ -238,8 +251,9 @@ def parse_money(text: str, kind: Kind = Kind.MONEY) -> tuple[Stated, str]:
     number = _numeral(text, match["number"].strip(), match["currency"] + per, kind)
     if not knows(per, kind):
         raise UnitError(f'found "{text}", which is not {kind.value}; write it as "{example}"')
-    factor = to_si(1.0, per, kind)
-    return Stated(number.value * factor, number.half_digit * factor, text), match["currency"]
+    return Stated(to_si(number.value, per, kind), half_digit_to_si(number.half_digit, per, kind), text), match[
+        "currency"
+    ]
 
 
 def _numeral(text: str, number: str, unit: str, kind: Kind) -> Numeral:
