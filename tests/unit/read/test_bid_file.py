@@ -207,6 +207,7 @@ def test_several_curves(tmp_path):
     ("second", "message"),
     [
         (SECOND.replace("430", "412"), "[[curves]] impeller: 412 mm has a curve already; each diameter has one"),
+        (SECOND.replace("430 mm", "0.412 m"), "[[curves]] impeller: 412 mm has a curve already"),
         (SECOND.replace("curve2.csv", "curve.csv"), '"curve.csv" is the file of another curve already'),
     ],
 )
