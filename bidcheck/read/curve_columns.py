@@ -4,6 +4,7 @@ import re
 from dataclasses import dataclass
 from typing import Literal
 
+from bidcheck.numerals import clipped
 from bidcheck.quantity import Kind
 from bidcheck.read.nearest import nearest
 from bidcheck.units import knows, spellings, unknown_unit
@@ -105,6 +106,7 @@ def _heading(cell: str) -> tuple[Heading | None, str]:
     """One cell of the header, or what is wrong with it."""
     if not cell or cell.startswith("#"):
         return Heading(None, None, cell), ""
+    cell = clipped(cell, 80)
     text, unit = _split_heading(cell)
     name = _BY_SPELLING.get(_plain(text))
     if name is None:

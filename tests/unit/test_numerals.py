@@ -54,5 +54,14 @@ def test_thousands_in_a_column():
     assert not looks_like_thousands(["800", "900"])
 
 
+def test_long_texts_cost_no_time():
+    """A pattern that tries every split of a run of digits would take hours here."""
+    assert split_quantity("1" * 100_000 + "x")[1] == "x"
+    with pytest.raises(UnreadableNumeral):
+        read_numeral("1" * 100_000 + "x")
+    with pytest.raises(UnreadableNumeral):
+        read_numeral("1," * 50_000 + "x")
+
+
 def test_split_without_a_number():
     assert split_quantity("m3/h") == ("", "m3/h")

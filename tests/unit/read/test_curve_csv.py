@@ -101,6 +101,8 @@ def test_header_refused(header, message):
         ("flow [m3/h], head [m]\n", ": has a header but no points"),
         ("flow [m3/h], head [m]\n,\n1,\n2,\n", ": has no figures beneath its header"),
         ('flow [m3/h], head [m]\n1, "60\n', ":2: has a quotation mark"),
+        ("flow [m3/h], head [m]\n1, " + "6" * 140_000, ":2: has a cell far too long"),
+        ("flow [m3/h], head [m]\n1, " + "6" * 100, ':2: head "' + "6" * 57 + '..." is not a number of ordinary size'),
         ("flow [m3/h], head [m]\n1, 60\n", ":2: column head has one point at one flow only"),
     ],
 )

@@ -141,6 +141,7 @@ def test_missing_keys_come_with_an_example(tmp_path):
         ("liquid", 'temperature = "-300 degC"', "[liquid] temperature: found"),
         ("liquid", 'vapour_pressure = "2 kPa"', "where absolute pressure is needed; write kPa(a)"),
         ("liquid", "solids = 3", '[liquid] solids: found 3, text is needed; write solids = "..."'),
+        ("liquid", 'solids = "a\\u001b[31mb"', 'found "a?[31mb", which holds control characters'),
         ("liquid", 'solids = " "', "[liquid] solids: is empty"),
         ("limits", 'npsh_margn = { at_least = "1 m", origin = "x" }', 'is not known; nearest is "npsh_margin"'),
     ],
