@@ -8,7 +8,7 @@ import re
 from typing import NamedTuple
 
 _NUMBER = (
-    r"[+\-−]?(?:\d{1,3}(?:[\s'’]\d{3})+(?!\d)(?:[.,]\d+)?|[\d.,]*\d[\d.,]*)(?:[eE][+\-−]?\d+)?"  # 1 200.5 | 1200.5e3
+    r"[+\-−]?(?:\d{1,3}(?:[\s'’]\d{3})+(?!\d)(?:[.,]\d+)?|[.,]*\d[\d.,]*)(?:[eE][+\-−]?\d+)?"  # 1 200.5 | 1200.5e3
 )
 _QUANTITY = re.compile(rf"\s*(?P<number>{_NUMBER})(?P<rest>.*)", re.DOTALL)
 _WHOLE = re.compile(rf"\s*(?P<number>{_NUMBER})\s*")
@@ -34,6 +34,18 @@ class UnreadableNumeral(ValueError):  # noqa: N818 - a kind of text, not a failu
         self.fault = fault
         self.cures = cures
         super().__init__(fault)
+
+
+def clipped(text: str, most: int = 60) -> str:
+    """Text fit for a message: short, without control characters.
+
+    Examples
+    --------
+    >>> clipped("1" * 100)
+    '111111111111111111111111111111111111111111111111111111111...'
+    """
+    short = text if len(text) <= most else f"{text[: most - 3]}..."
+    return "".join(c if c.isprintable() else " " if c.isspace() else "?" for c in short)
 
 
 def split_quantity(text: str) -> tuple[str, str]:

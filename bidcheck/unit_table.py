@@ -192,3 +192,13 @@ CASE_MATTERS = frozenset({"MW", "MPa", "mbar", "MPa(a)", "MPaa", "MPaabs", "MPa(
 SHARES = frozenset({Kind.SHARE, Kind.WHOLE_SHARE})
 NEED_NO_UNIT = SHARES | {Kind.RATIO, Kind.COUNT, Kind.TEXT}
 """Kinds that may be written as a bare number."""
+
+EXAMPLE_NUMBER = {Kind.SHARE: "84", Kind.WHOLE_SHARE: "84", Kind.SPEED: "1480", Kind.FLOW: "450"}
+"""Numbers for examples in messages."""
+
+_REWRITTEN = str.maketrans({"³": "3", "²": "2", "⁻": "-", "¹": "1", "^": "", "·": ".", "⋅": ".", "*": ".", "º": "°"})
+
+
+def plain_spelling(spelling: str) -> str:
+    """A spelling without spaces, raised figures and other matters of taste."""
+    return "".join(spelling.translate(_REWRITTEN).split())

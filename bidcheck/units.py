@@ -4,20 +4,21 @@ Absolute and gauge pressure are never guessed: a field that needs an absolute pr
 currency of money is kept beside the number, not converted.
 """
 
+import math
 import re
 from difflib import get_close_matches
 from functools import cache, lru_cache
-from typing import TYPE_CHECKING
+from typing import TYPE_CHECKING, NamedTuple
 
 from bidcheck.errors import UnitError
-from bidcheck.numerals import Numeral, UnreadableNumeral, read_numeral, split_quantity
+from bidcheck.numerals import Numeral, UnreadableNumeral, clipped, read_numeral, split_quantity
 from bidcheck.quantity import Kind, Stated
-from bidcheck.unit_table import ABSOLUTE, CASE_MATTERS, GAUGE, NEED_NO_UNIT, SHARES, SI, TABLE
+from bidcheck.unit_refusals import refuse_bare_share, refuse_other_pressure
+from bidcheck.unit_table import CASE_MATTERS, EXAMPLE_NUMBER, NEED_NO_UNIT, SHARES, SI, TABLE, plain_spelling
 
 if TYPE_CHECKING:
     import pint
 
-_REWRITTEN = str.maketrans({"³": "3", "²": "2", "⁻": "-", "¹": "1", "^": "", "·": ".", "⋅": ".", "*": ".", "º": "°"})
 _CURRENCY_LAST = re.compile(r"(?P<number>.*?\d[.,]?)\s*(?P<currency>[A-Z]{3})(?P<per>\s*(?:/|per\s).*)?")
 _CURRENCY_FIRST = re.compile(r"(?P<currency>[A-Z]{3})\s*(?P<number>[-+−\d.,].*\d|\d)(?P<per>\s*(?:/|per\s).*)?")
 
@@ -30,28 +31,34 @@ def _registry() -> "pint.UnitRegistry[float]":
     return pint.UnitRegistry()
 
 
+class _Scale(NamedTuple):
+    """SI = value * factor / divisor + offset; a whole divisor keeps 450 m3/h at 0.125 m³/s."""
+
+    factor: float
+    divisor: float
+    offset: float
+
+
 @cache
-def _scale(expression: str, si: str) -> tuple[float, float]:
-    """Factor and offset from a pint expression to SI: si = factor * value + offset."""
+def _scale(expression: str, si: str) -> _Scale:
+    """Scale from a pint expression to SI."""
     if expression == si:
-        return 1.0, 0.0
+        return _Scale(1.0, 1.0, 0.0)
     registry = _registry()
     if expression in ("degC", "degF"):
-        zero, one = (float(registry.Quantity(value, expression).to(si).magnitude) for value in (0.0, 100.0))
-        return (one - zero) / 100.0, zero
+        zero, hundred = (float(registry.Quantity(value, expression).to(si).magnitude) for value in (0.0, 100.0))
+        return _Scale(float(f"{hundred - zero:.12g}"), 100.0, zero)
     factor = float((1.0 * registry.parse_expression(expression)).to(si).magnitude)
-    return float(f"{factor:.15g}"), 0.0
-
-
-def _plain(spelling: str) -> str:
-    """A spelling without spaces, raised figures and other matters of taste."""
-    return "".join(spelling.translate(_REWRITTEN).split())
+    divisor = round(1.0 / factor)
+    if divisor > 0 and math.isclose(factor * divisor, 1.0, rel_tol=1e-14):
+        return _Scale(1.0, float(divisor), 0.0)
+    return _Scale(float(f"{factor:.15g}"), 1.0, 0.0)
 
 
 @cache
 def _lookup(kind: Kind) -> tuple[dict[str, str], dict[str, str]]:
     """Plain spelling → pint expression, exact and with case folded."""
-    exact = {_plain(spelling): expression for spelling, expression in TABLE[kind].items()}
+    exact = {plain_spelling(spelling): expression for spelling, expression in TABLE[kind].items()}
     folded = {plain.casefold(): expression for plain, expression in exact.items() if plain not in CASE_MATTERS}
     return exact, folded
 
@@ -59,7 +66,7 @@ def _lookup(kind: Kind) -> tuple[dict[str, str], dict[str, str]]:
 def _expression(spelling: str, kind: Kind) -> str | None:
     """Pint expression of a spelling, None where the kind does not know it."""
     exact, folded = _lookup(kind)
-    plain = _plain(spelling)
+    plain = plain_spelling(spelling)
     return exact.get(plain, folded.get(plain.casefold()))
 
 
@@ -107,8 +114,8 @@ def to_si(value: float, spelling: str, kind: Kind) -> float:
     >>> to_si(68.0, "°F", Kind.TEMPERATURE)
     293.15
     """
-    factor, offset = _scale_of(spelling, kind)
-    return factor * value + offset
+    factor, divisor, offset = _scale_of(spelling, kind)
+    return value * factor / divisor + offset
 
 
 def from_si(value: float, spelling: str, kind: Kind) -> float:
@@ -119,12 +126,12 @@ def from_si(value: float, spelling: str, kind: Kind) -> float:
     >>> from_si(0.125, "m³/h", Kind.FLOW)
     450.0
     """
-    factor, offset = _scale_of(spelling, kind)
-    return (value - offset) / factor
+    factor, divisor, offset = _scale_of(spelling, kind)
+    return (value - offset) * divisor / factor
 
 
-def _scale_of(spelling: str, kind: Kind) -> tuple[float, float]:
-    """Factor and offset of a spelling, or a UnitError."""
+def _scale_of(spelling: str, kind: Kind) -> _Scale:
+    """Scale of a spelling, or a UnitError."""
     expression = _expression(spelling, kind)
     if expression is None:
         raise UnitError(unknown_unit(spelling, kind))
@@ -133,7 +140,8 @@ def _scale_of(spelling: str, kind: Kind) -> tuple[float, float]:
 
 def half_digit_to_si(half_digit: float, spelling: str, kind: Kind) -> float:
     """Convert a difference, so without the offset of a temperature scale."""
-    return abs(_scale_of(spelling, kind)[0]) * half_digit
+    factor, divisor, _ = _scale_of(spelling, kind)
+    return half_digit * factor / divisor
 
 
 def unknown_unit(spelling: str, kind: Kind) -> str:
@@ -141,21 +149,23 @@ def unknown_unit(spelling: str, kind: Kind) -> str:
 
     Examples
     --------
-    >>> unknown_unit("m3/hr", Kind.FLOW)
-    'unit "m3/hr" is not known for flow; nearest is "m3/h"'
+    >>> unknown_unit("kWatt", Kind.POWER)
+    'unit "kWatt" is not known for power; nearest is "kW"'
     """
     known = spellings(kind)
     elsewhere = next(
         (other.value for other in TABLE if other is not kind and spelling and knows(spelling, other)), None
     )
     if not known:
-        return f'{kind.value} is written without a unit, found "{spelling}"'
+        return f'{kind.value} is written without a unit, found "{clipped(spelling)}"'
     if elsewhere is not None:
-        return f'unit "{spelling}" belongs to {elsewhere}, not to {kind.value}; known are {", ".join(known[:4])}'
-    folded = {_plain(name).casefold(): name for name in reversed(known)}
-    near = get_close_matches(_plain(spelling).casefold(), list(folded), n=1, cutoff=0.5)
+        return (
+            f'unit "{clipped(spelling)}" belongs to {elsewhere}, not to {kind.value}; known are {", ".join(known[:4])}'
+        )
+    folded = {plain_spelling(name).casefold(): name for name in reversed(known)}
+    near = get_close_matches(plain_spelling(spelling).casefold(), list(folded), n=1, cutoff=0.5)
     hint = f'nearest is "{folded[near[0]]}"' if near else f"known are {', '.join(known[:4])}"
-    return f'unit "{spelling}" is not known for {kind.value}; {hint}'
+    return f'unit "{clipped(spelling)}" is not known for {kind.value}; {hint}'
 
 
 def parse(text: str, kind: Kind, *, absolute: bool | None = None) -> Stated:
@@ -192,14 +202,14 @@ def parse(text: str, kind: Kind, *, absolute: bool | None = None) -> Stated:
     number, unit = split_quantity(text)
     numeral = _numeral(text, number, unit, kind)
     if not unit and kind in SHARES:
-        _refuse_bare_share(text, number, numeral)
+        refuse_bare_share(text, number, numeral)
     elif not unit and kind not in NEED_NO_UNIT:
         usual = _usual(kind, absolute)
-        raise UnitError(f'found "{text}", which has no unit; write "{number} {usual}"')
+        raise UnitError(f'found "{clipped(text)}", which has no unit; write "{number} {usual}"')
     if not knows(unit, kind):
-        raise UnitError(f'found "{text}": {unknown_unit(unit, kind)}')
+        raise UnitError(f'found "{clipped(text)}": {unknown_unit(unit, kind)}')
     if kind is Kind.PRESSURE and absolute is not None:
-        _refuse_other_pressure(text, number, unit, absolute)
+        refuse_other_pressure(text, number, unit, absolute)
     half_digit = half_digit_to_si(numeral.half_digit, unit, kind)
     return Stated(to_si(numeral.value, unit, kind), half_digit, text)
 
@@ -233,13 +243,16 @@ def parse_money(text: str, kind: Kind = Kind.MONEY) -> tuple[Stated, str]:
     example = "0.11 EUR/kWh" if kind is Kind.MONEY_PER_ENERGY else "182000 EUR"
     match = _CURRENCY_LAST.fullmatch(text.strip()) or _CURRENCY_FIRST.fullmatch(text.strip())
     if match is None:
-        raise UnitError(f'found "{text}", which is not {kind.value} with a currency code; write it as "{example}"')
-    per = _plain(match["per"] or "").replace("per", "/", 1)
+        raise UnitError(
+            f'found "{clipped(text)}", which is not {kind.value} with a currency code; write it as "{example}"'
+        )
+    per = plain_spelling(match["per"] or "").replace("per", "/", 1)
     number = _numeral(text, match["number"].strip(), match["currency"] + per, kind)
     if not knows(per, kind):
-        raise UnitError(f'found "{text}", which is not {kind.value}; write it as "{example}"')
-    factor = to_si(1.0, per, kind)
-    return Stated(number.value * factor, number.half_digit * factor, text), match["currency"]
+        raise UnitError(f'found "{clipped(text)}", which is not {kind.value}; write it as "{example}"')
+    return Stated(to_si(number.value, per, kind), half_digit_to_si(number.half_digit, per, kind), text), match[
+        "currency"
+    ]
 
 
 def _numeral(text: str, number: str, unit: str, kind: Kind) -> Numeral:
@@ -248,14 +261,13 @@ def _numeral(text: str, number: str, unit: str, kind: Kind) -> Numeral:
         return read_numeral(number)
     except UnreadableNumeral as fault:
         if not number:
-            example = f"{_EXAMPLE_NUMBER.get(kind, '12')} {_usual(kind, None)}".strip()
-            raise UnitError(f'found "{text}", which does not start with a number; write it as "{example}"') from None
+            example = f"{EXAMPLE_NUMBER.get(kind, '12')} {_usual(kind, None)}".strip()
+            raise UnitError(
+                f'found "{clipped(text)}", which does not start with a number; write it as "{example}"'
+            ) from None
         cures = " or ".join(f'"{f"{cure} {unit}".strip()}"' for cure in fault.cures)
         cure = f"; write {cures}" if cures else ""
-        raise UnitError(f'found "{text}", whose number {fault.fault}{cure}') from None
-
-
-_EXAMPLE_NUMBER = {Kind.SHARE: "84", Kind.WHOLE_SHARE: "84", Kind.SPEED: "1480", Kind.FLOW: "450"}
+        raise UnitError(f'found "{clipped(text)}", whose number {fault.fault}{cure}') from None
 
 
 def _usual(kind: Kind, absolute: bool | None) -> str:
@@ -264,24 +276,3 @@ def _usual(kind: Kind, absolute: bool | None) -> str:
         return "bar(a)"
     known = spellings(kind)
     return known[0] if known else ""
-
-
-def _refuse_bare_share(text: str, number: str, numeral: Numeral) -> None:
-    """A bare number above one is a percentage or a factor, nobody can tell; so is a bare 1."""
-    if numeral.value > 1.0 or number == "1":
-        as_factor = f"{100.0 * numeral.value:.6g} %" if numeral.value <= 2.0 else f"{numeral.value / 100.0:.6g}"
-        raise UnitError(f'found "{text}", which may be per cent or a fraction; write "{number} %" or "{as_factor}"')
-
-
-def _refuse_other_pressure(text: str, number: str, unit: str, absolute: bool) -> None:
-    """Absolute where absolute is needed, never where it is not."""
-    plain = _plain(unit).casefold()
-    base = next(name for name in ABSOLUTE if plain in ABSOLUTE[name] | GAUGE[name] | {name.casefold()})
-    is_absolute = plain in ABSOLUTE[base]
-    if is_absolute and not absolute:
-        raise UnitError(f'found "{text}", where gauge pressure is needed; take off air pressure and write {base}(g)')
-    if absolute and plain in GAUGE[base]:
-        raise UnitError(f'found "{text}", where absolute pressure is needed; add air pressure and write {base}(a)')
-    if absolute and not is_absolute:
-        cure = f'write {base}(a), as in "{number} {base}(a)", if it is absolute'
-        raise UnitError(f'found "{text}", where absolute pressure is needed; {cure}')

@@ -2,6 +2,7 @@
 
 from collections.abc import Sequence
 from dataclasses import dataclass
+from math import isclose
 from pathlib import Path, PurePosixPath
 from typing import Any, Literal
 
@@ -62,7 +63,7 @@ def read_curves(
         table.require("file", '"curve.csv"')
         name = table.text("file")
         stated = _stated_basis(table, basis)
-        if stated["impeller"] in impellers:
+        if any(_same(stated["impeller"], other) for other in impellers):
             table.problem("impeller", _same_impeller(stated["impeller"]))
         impellers.append(stated["impeller"])
         if name is None or not _stays_inside(table, name, root / folder):
@@ -77,6 +78,11 @@ def read_curves(
         if stated["speed_rpm"] is not None:
             curves.append(_curve(source.file, stated, points))
     return tuple(curves), sources
+
+
+def _same(one: float | None, other: float | None) -> bool:
+    """Whether two diameters are one, or both unknown."""
+    return one == other if one is None or other is None else isclose(one, other, rel_tol=1e-6)
 
 
 def _same_impeller(impeller: object) -> str:

@@ -17,6 +17,7 @@ from bidcheck.bid import (
     GuaranteeOffered,
 )
 from bidcheck.curve import Curve
+from bidcheck.numerals import clipped
 from bidcheck.quantity import Kind
 from bidcheck.read.bid_curves import Basis
 from bidcheck.read.table import Table
@@ -107,7 +108,7 @@ def _check_identity(top: Table, place: Place) -> None:
     bidder, revision = top.text("bidder"), top.text("revision")
     if bidder is not None and bidder != place.bidder:
         cure = f'write bidder = "{place.bidder}" or rename the folder; a name for display goes into title'
-        top.problem("bidder", f'found "{bidder}" in folder "{place.bidder}"; {cure}')
+        top.problem("bidder", f'found "{clipped(bidder)}" in folder "{place.bidder}"; {cure}')
     if revision is not None and revision != place.revision:
         top.problem("revision", f'found "{revision}" in the folder of revision {place.revision}; correct one of them')
 

@@ -4,6 +4,7 @@ import re
 from dataclasses import dataclass
 from typing import Literal
 
+from bidcheck.numerals import clipped
 from bidcheck.quantity import Kind
 from bidcheck.read.nearest import nearest
 from bidcheck.units import knows, spellings, unknown_unit
@@ -40,7 +41,6 @@ COLUMN_KINDS: dict[Name, Kind] = {
 }
 
 _OTHER_POWER = ("p1", "inputpower", "motorinput", "motorinputpower", "electricpower", "wirepower")
-_UNIT_IN = (re.compile(r"([^\[]*)\[(.*)\]"), re.compile(r"([^(]*)\((.*)\)"), re.compile(r"(.*),([^,]*)"))
 
 
 @dataclass(frozen=True, slots=True)
@@ -106,17 +106,29 @@ def _heading(cell: str) -> tuple[Heading | None, str]:
     """One cell of the header, or what is wrong with it."""
     if not cell or cell.startswith("#"):
         return Heading(None, None, cell), ""
-    text, unit = cell, None
-    name = _BY_SPELLING.get(_plain(cell))
-    if name is None:
-        for pattern in _UNIT_IN:
-            if match := pattern.fullmatch(cell):
-                text, unit = match[1].strip(), match[2].strip()
-                break
-        name = _BY_SPELLING.get(_plain(text))
+    cell = clipped(cell, 80)
+    text, unit = _split_heading(cell)
+    name = _BY_SPELLING.get(_plain(text))
     if name is None:
         return Heading(None, None, cell), _unknown(cell, text)
     return Heading(name, unit or None, cell), _wrong_unit(cell, name, unit)
+
+
+def _split_heading(cell: str) -> tuple[str, str | None]:
+    """Name and unit of a cell: the first way of splitting it in which both are known, else the name."""
+    ways: list[tuple[str, str | None]] = [(cell, None)]
+    for opening, closing in ("[]", "()"):
+        if cell.endswith(closing):
+            starts = [n for n, character in enumerate(cell) if character == opening]
+            ways += [(cell[:n].strip(), cell[n + 1 : -1].strip()) for n in starts]
+    if "," in cell:
+        before, _, after = cell.rpartition(",")
+        ways.append((before.strip(), after.strip()))
+    known = [(text, unit) for text, unit in ways if _plain(text) in _BY_SPELLING]
+    for text, unit in known:
+        if unit is None or knows(unit, COLUMN_KINDS[_BY_SPELLING[_plain(text)]]):
+            return text, unit
+    return known[0] if known else ways[min(1, len(ways) - 1)]
 
 
 def _wrong_unit(cell: str, name: Name, unit: str | None) -> str:

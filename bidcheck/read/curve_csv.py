@@ -5,7 +5,7 @@ import re
 from dataclasses import dataclass
 
 from bidcheck.curve import Column, Points
-from bidcheck.numerals import UnreadableNumeral, looks_like_thousands, read_numeral, split_quantity
+from bidcheck.numerals import UnreadableNumeral, clipped, looks_like_thousands, read_numeral, split_quantity
 from bidcheck.read.curve_columns import Heading, missing_units, read_headings, with_unit_row
 from bidcheck.read.curve_points import Cell, read_points
 from bidcheck.read.source import Source
@@ -86,8 +86,10 @@ def _split(lines: list[tuple[int, str]], separator: str, source: Source) -> list
         try:
             cells = next(csv.reader([line], delimiter=separator, skipinitialspace=True, strict=True), [])
             rows.append(_Row(number, [cell.strip() for cell in cells]))
-        except csv.Error:
-            source.problem('has a quotation mark " that is not closed', number)
+        except csv.Error as error:
+            too_long = "limit" in str(error)
+            text = "has a cell far too long" if too_long else 'has a quotation mark " that is not closed'
+            source.problem(text, number)
     return rows
 
 
@@ -175,9 +177,11 @@ def _cell(
     """One cell as a number, None where it is blank, ignored or wrong."""
     if heading.name is None or not text:
         if text and not heading.text:
-            source.problem(f'cell "{text}" stands in a column without a heading; name the column or delete it', line)
+            source.problem(
+                f'cell "{clipped(text)}" stands in a column without a heading; name the column or delete it', line
+            )
         return None
-    shown = f'{heading.name} "{text}"'
+    shown = f'{heading.name} "{clipped(text)}"'
     if separator == "," and _DECIMAL_COMMA.fullmatch(text):
         cure = f"separate the columns with ; or write {text.replace(',', '.').strip()}"
         source.problem(f"{shown} has a decimal comma but columns are also separated by commas; {cure}", line)

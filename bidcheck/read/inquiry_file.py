@@ -86,16 +86,13 @@ def _duty(table: Table) -> Duty | None:
 
 def _check_order(table: Table, flows: dict[str, float | None]) -> None:
     """Smallest flow ≤ rated and normal flow ≤ largest flow."""
-    for low, high in (
-        ("min_flow", "max_flow"),
-        ("min_flow", "rated_flow"),
-        ("rated_flow", "max_flow"),
-        ("min_flow", "normal_flow"),
-        ("normal_flow", "max_flow"),
-    ):
-        smaller, larger = flows[low], flows[high]
-        if smaller is not None and larger is not None and smaller > larger * (1.0 + 1e-9):
-            table.problem(low, f'found "{table.data[low]}", above {high} "{table.data[high]}"')
+    above = {"min_flow": ("max_flow", "rated_flow", "normal_flow"), "rated_flow": ("max_flow",)}
+    for low, highs in {**above, "normal_flow": ("max_flow",)}.items():
+        for high in highs:
+            smaller, larger = flows[low], flows[high]
+            if smaller is not None and larger is not None and smaller > larger * (1.0 + 1e-9):
+                table.problem(low, f'found "{table.data[low]}", above {high} "{table.data[high]}"')
+                break
 
 
 def _suction(top: Table) -> Suction | None:

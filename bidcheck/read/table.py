@@ -4,6 +4,7 @@ from collections.abc import Mapping, Sequence
 from typing import Literal, TypeVar
 
 from bidcheck.errors import UnitError
+from bidcheck.numerals import clipped
 from bidcheck.quantity import Kind, Stated
 from bidcheck.read.nearest import nearest
 from bidcheck.read.source import Source
@@ -92,6 +93,9 @@ class Table:
         if not value.strip():
             self.problem(key, "is empty; write a text or delete the key")
             return None
+        if any(ord(character) < 32 and character not in "\n\t" for character in value):
+            self.problem(key, f'found "{clipped(value)}", which holds control characters; delete them')
+            return None
         return value.strip()
 
     def texts(self, key: str) -> tuple[str, ...]:
@@ -113,7 +117,7 @@ class Table:
         for word in allowed:
             if word.casefold() == plain:
                 return word
-        self.problem(key, f'found "{text}"; {nearest(text, allowed)}; write one of: {", ".join(allowed)}')
+        self.problem(key, f'found "{clipped(text)}"; {nearest(text, allowed)}; write one of: {", ".join(allowed)}')
         return None
 
     def flag(self, key: str) -> bool | None:
@@ -162,7 +166,7 @@ class Table:
         """Note every key nobody asked for, here and in the tables inside."""
         for key in self.data:
             if key not in self._asked:
-                self.problem(key, f"is not known; {nearest(key, self._asked)}")
+                self.problem(clipped(key), f"is not known; {nearest(key, self._asked)}")
         for table in self._subtables:
             table.close()
 
@@ -204,4 +208,4 @@ def _shown(value: object) -> str:
         return "a table"
     if isinstance(value, list):
         return "a list"
-    return f'"{value}"' if isinstance(value, str) else str(value)
+    return f'"{clipped(value)}"' if isinstance(value, str) else clipped(str(value))
