@@ -4,8 +4,9 @@ from dataclasses import replace
 
 from bidcheck.bid import Bid
 from bidcheck.curve import Curve, Fit, Fits, Points
+from bidcheck.errors import OutOfRange
 from bidcheck.fit import fit_curve
-from bidcheck.hydraulics.viscous import performance_factor
+from bidcheck.hydraulics.viscous import viscosity_parameter, viscous_factors, viscous_head_factor
 from bidcheck.inquiry import Liquid
 from bidcheck.quantity import Assumption
 
@@ -14,9 +15,12 @@ NPSH3_UP, NPSH3_DOWN = 2.0, 1.3
 
 
 def scaled(points: Points | None, flow: float = 1.0, value: float = 1.0) -> Points | None:
+    """Points with flow and value multiplied, printed digits along with them; None stays None."""
+    return None if points is None else scaled_points(points, flow, value)
+
+
+def scaled_points(points: Points, flow: float = 1.0, value: float = 1.0) -> Points:
     """Points with flow and value multiplied, printed digits along with them."""
-    if points is None:
-        return None
     return Points(
         flow=points.flow * flow,
         value=points.value * value,
@@ -76,7 +80,7 @@ def viscosity_matters(liquid: Liquid, bid: Bid, fits: Fits) -> bool:
     bep = fits.bep
     if bep is None or bep.head is None or bep.head <= 0:
         return False
-    return bool(performance_factor(liquid.viscosity, bep.head / bid.stages, bep.flow, bid.speed_rpm) > 1.0)
+    return viscosity_parameter(liquid.viscosity, bep.head / bid.stages, bep.flow, bid.speed_rpm) > 1.0
 
 
 def as_pumped(curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumptions: list[Assumption]) -> Fits | None:
@@ -86,8 +90,7 @@ def as_pumped(curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumptions: l
     them nothing is known as pumped.
     """
     if curve.liquid == "water" and viscosity_matters(liquid, bid, fits):
-        corrected = _corrected_for_viscosity(curve, fits, liquid, bid, assumptions)
-        return fit_curve(corrected) if corrected is not None else None
+        return _viscous_fits(curve, fits, liquid, bid, assumptions)
     if fits.power is None:
         return fits
     return replace(fits, power=_scaled_fit(fits.power, liquid.density / curve.density))
@@ -103,3 +106,31 @@ def _scaled_fit(fit: Fit, factor: float) -> Fit:
         covariance=fit.covariance * factor**2,
         guard_difference=None if fit.guard_difference is None else fit.guard_difference * factor,
     )
+
+
+def _viscous_fits(curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumptions: list[Assumption]) -> Fits | None:
+    """Fits of the water curve corrected for viscosity; None outside the limits of the correction."""
+    bep, head, efficiency = fits.bep, curve.head, curve.efficiency
+    if bep is None or bep.head is None or head is None or efficiency is None:
+        return None
+    what = f"{curve.file}: as pumped"
+    try:
+        factors = viscous_factors(liquid.viscosity, bep.head / bid.stages, bep.flow, bid.speed_rpm)
+    except OutOfRange as error:
+        assumptions.append(Assumption(what, "not known", str(error)))
+        return None
+    words = f"C_Q {factors.flow:.4f}, C_η {factors.efficiency:.4f} (B {factors.parameter:.2f}); NPSH3 left as for water"
+    assumptions.append(Assumption(what, words, "water curve corrected by ANSI/HI 9.6.7"))
+    C_H = viscous_head_factor(head.flow / bep.flow, factors.flow)
+    thick_head = replace(scaled_points(head, factors.flow), value=head.value * C_H)
+    thick_efficiency = scaled_points(efficiency, factors.flow, factors.efficiency)
+    corrected = replace(
+        curve,
+        liquid="as pumped",
+        density=liquid.density,
+        head=thick_head,
+        efficiency=thick_efficiency,
+        power=None,
+        npsh3=scaled(curve.npsh3, factors.flow),
+    )
+    return fit_curve(corrected)

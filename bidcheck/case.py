@@ -62,7 +62,7 @@ class EfficiencyEstimate:
         """Share of the surveyed market with a lower efficiency at this size and speed; None without a class."""
         from math import erf, sqrt
 
-        if self.expected is None or self.sigma is None:
+        if self.expected is None or self.sigma is None or not self.market_class:
             return None
         return 0.5 * (1.0 + erf((efficiency - self.expected) / self.sigma / sqrt(2.0)))
 

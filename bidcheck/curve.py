@@ -82,8 +82,8 @@ class Curve:
 class OddPoint:
     """A point that lies off its own curve, likely misread.
 
-    `would_fit` is the value the curve through the other points has there; `deviation` is the distance from it as
-    a share of the curve's largest value.
+    `would_fit` is the value the curve through the other points has there; `deviation` is value less `would_fit` as a
+    share of the curve's largest value.
     """
 
     column: Column

@@ -205,11 +205,7 @@ def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, water: str) -> 
         flow=bep.flow,
         head_per_stage=head,
         speed_rpm=bid.speed_rpm,
-        stages=bid.stages,
-        suction_eyes=bid.suction_eyes,
         diameter=curve.impeller,
-        viscosity=1.0e-6,
-        density=curve.density,
     )
     half_width = fits.efficiency.half_width(bep.flow) if fits.efficiency is not None else None
     return Estimates(

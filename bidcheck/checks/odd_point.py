@@ -35,7 +35,7 @@ def run(case: Case) -> Iterator[Measured]:
 def _odd(case: Case, file: str, odd: OddPoint) -> Measured:
     """One odd point with the value that would fit."""
     limit = case.inquiry.limits.odd_point
-    large = not within(odd.deviation, limit).holds
+    large = not within(abs(odd.deviation), limit).holds
     name = file.rsplit("/", 1)[-1]
     kind = AS_EVIDENCE[odd.column]
     return Measured(
@@ -48,7 +48,7 @@ def _odd(case: Case, file: str, odd: OddPoint) -> Measured:
             "flow": flow(odd.flow),
             "found": kind(odd.value),
             "would_fit": kind(odd.would_fit),
-            "deviation": share(odd.deviation),
+            "deviation": share(abs(odd.deviation)),
         },
     )
 

@@ -1,7 +1,7 @@
 """Efficiency of the market surveyed for Regulation (EU) 547/2012, by class, specific speed and flow.
 
-The regulation publishes for each class the constant C that 10 % and 40 % of the surveyed pumps do not reach; the two define
-a normal distribution of efficiency points about the surface. The survey is older than the floor of 2015.
+The regulation publishes for each class the constant C that 10 % and 40 % of the surveyed pumps do not reach; the
+two define a normal distribution of efficiency points about the surface. The survey is older than the floor of 2015.
 """
 
 import math

@@ -34,7 +34,7 @@ def shaft_power(density: float, flow: F, head: F, efficiency: F) -> F:
     Examples
     --------
     >>> shaft_power(1000.0, 0.125, 62.0, 0.825)
-    92122.0
+    92123.0
     """
     return density * GRAVITY * flow * head / efficiency
 
@@ -50,7 +50,7 @@ def efficiency_from_power(density: float, flow: F, head: F, power: F) -> F:
 
     Examples
     --------
-    >>> efficiency_from_power(1000.0, 0.125, 62.0, 92122.0)
+    >>> efficiency_from_power(1000.0, 0.125, 62.0, 92123.0)
     0.825
     """
     return density * GRAVITY * flow * head / power

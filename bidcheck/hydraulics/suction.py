@@ -105,7 +105,7 @@ def air_pressure(altitude: float) -> float:
     Examples
     --------
     >>> air_pressure(1000.0)
-    89875.0
+    89874.6
     """
     if not -500.0 <= altitude <= 11000.0:
         raise OutOfRange(f"air pressure asked at {altitude:.0f} m; the formula holds from -500 to 11 000 m")

@@ -119,7 +119,7 @@ def viscous_head_factor(flow_over_bep: Floats, flow_factor: float) -> Floats:
 
     Examples
     --------
-    >>> viscous_head_factor(np.array([0.0, 1.0]), 0.9378)
-    array([1.0, 0.9378])
+    >>> viscous_head_factor(np.array([0.0, 1.0]), 0.9378).tolist()
+    [1.0, 0.9378]
     """
     return np.asarray(1.0 - (1.0 - flow_factor) * flow_over_bep**0.75, dtype=np.float64)

@@ -1,16 +1,18 @@
 from dataclasses import replace
 
 import pytest
-from bidcheck.read.limit_sets import limit_set
 
 from bidcheck.case import Case
 from bidcheck.checks import npsh_margin, suction_specific_speed
 from bidcheck.finding import Verdict
 from bidcheck.inquiry import Duty
+from bidcheck.quantity import Kind
+from bidcheck.read.limit_sets import limit_set
+from bidcheck.units import from_si
 from tests.build import M3H
 from tests.unit.checks.judge import judge, sound_case
 
-US = 51.645
+US = from_si(1.0, "US", Kind.SUCTION_SPECIFIC_SPEED)
 
 
 def at_npsh(npsh3: float | None, npsha: float | None, nss_us: float | None = 7000.0) -> Case:
