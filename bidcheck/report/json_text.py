@@ -1,4 +1,4 @@
-"""The evaluation as JSON: trade SI units in key names, fractions for ratios, null never NaN, the same bytes each time."""
+"""The evaluation as JSON: trade SI units in key names, fractions for ratios, null never NaN, repeatable bytes."""
 
 import json
 import math
