@@ -22,6 +22,15 @@ VERDICT_WORDS: dict[Verdict, str] = {
     Verdict.NO_DATA: "no data",
     Verdict.NOT_APPLICABLE: "not applicable",
 }
+VERDICT_MARKS: dict[Verdict, str] = {
+    Verdict.PASS: "✓",
+    Verdict.REMARK: "!",
+    Verdict.QUERY: "?",
+    Verdict.FAIL: "✕",
+    Verdict.NO_DATA: "○",
+    Verdict.NOT_APPLICABLE: "–",
+}
+"""A sign beside each word, so that verdicts differ without colour."""
 MARK_WORDS: dict[Mark, str] = {
     "text": "read in the text named",
     "crossed": "recalled, and reproduced by a second source or computation",
