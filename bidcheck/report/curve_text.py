@@ -10,6 +10,7 @@ from bidcheck.checks.curve_coverage import WORDS
 from bidcheck.checks.power_balance import balanced_rows
 from bidcheck.curve import COLUMNS, Column, Curve, Fit, Fits, Floats
 from bidcheck.explain import BALANCE, UNIT_MISTAKES, frequency_mistakes, in_words, mistakes_that_close
+from bidcheck.hydraulics.specific_speed import specific_speed, suction_specific_speed
 from bidcheck.quantity import Kind, UnitSystem
 from bidcheck.report.format import bare, figure, plain
 
@@ -147,3 +148,16 @@ def _balance_table(flows: Floats, gaps: Floats, tolerances: Floats, system: Unit
             "off" if off else "",
         )
     return table
+
+
+def specific_speed_lines(fits: Fits, speed_rpm: float, stages: int, system: UnitSystem) -> list[str]:
+    """Specific speed and suction specific speed at best efficiency, one suction eye; empty where there is none."""
+    bep = fits.bep
+    if bep is None or bep.head is None or bep.head <= 0:
+        return []
+    nq = specific_speed(speed_rpm, bep.flow, bep.head / stages)
+    lines = [f"specific speed {figure(nq, Kind.SPECIFIC_SPEED, system)} per stage, total flow"]
+    if fits.npsh3 is not None and fits.npsh3.covers(bep.flow) and fits.npsh3.at(bep.flow) > 0:
+        nss = suction_specific_speed(speed_rpm, bep.flow, fits.npsh3.at(bep.flow))
+        lines.append(f"suction specific speed {figure(nss, Kind.SUCTION_SPECIFIC_SPEED, system)}, one suction eye")
+    return lines
