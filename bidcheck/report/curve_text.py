@@ -13,6 +13,7 @@ from bidcheck.explain import BALANCE, UNIT_MISTAKES, frequency_mistakes, in_word
 from bidcheck.hydraulics.specific_speed import specific_speed, suction_specific_speed
 from bidcheck.quantity import Kind, UnitSystem
 from bidcheck.report.format import bare, figure, plain
+from bidcheck.report.terminal import print_trimmed
 
 KIND_OF: dict[Column, Kind] = {
     "head": Kind.HEAD,
@@ -34,7 +35,7 @@ def print_curve(fits: Fits, curve: Curve, console: Console, system: UnitSystem) 
     """
     console.print(Text(plain(curve.file), style="bold"))
     console.print()
-    console.print(_fits_table(fits, system))
+    print_trimmed(_fits_table(fits, system), console)
     console.print()
     for line in best_efficiency_lines(fits, system):
         console.print(Text(line))
@@ -130,7 +131,7 @@ def _print_balance(fits: Fits, curve: Curve, console: Console, system: UnitSyste
         verdict += f"it looks as if {in_words(closing)}" if closing else "no single mistake explains it"
     console.print(Text(verdict))
     console.print()
-    console.print(_balance_table(flows, gaps, tolerances, system))
+    print_trimmed(_balance_table(flows, gaps, tolerances, system), console)
 
 
 def _balance_table(flows: Floats, gaps: Floats, tolerances: Floats, system: UnitSystem) -> Table:

@@ -50,7 +50,7 @@ def print_evaluation(evaluation: Evaluation, console: Console, system: UnitSyste
     """
     console.print(_headline(evaluation.inquiry, system))
     console.print()
-    console.print(_table(evaluation, system))
+    print_trimmed(_table(evaluation, system), console)
     for bid in evaluation.bids:
         console.print()
         _print_bid(bid, console, system)
@@ -59,6 +59,14 @@ def print_evaluation(evaluation: Evaluation, console: Console, system: UnitSyste
     if any(finding.check == "efficiency-claim" for bid in evaluation.bids for finding in against(bid.findings)):
         _print_prose(HOW_SHARP, console)
     _print_prose(CAUTION, console)
+
+
+def print_trimmed(table: Table, console: Console) -> None:
+    """A table without blanks at the end of its lines."""
+    for segments in console.render_lines(table, pad=False):
+        line = Text.assemble(*((segment.text, segment.style or "") for segment in segments))
+        line.rstrip()
+        console.print(line, soft_wrap=True)
 
 
 def _print_prose(words: str, console: Console) -> None:
