@@ -3,7 +3,7 @@
 import io
 import re
 from collections.abc import Sequence
-from typing import TYPE_CHECKING, NamedTuple
+from typing import TYPE_CHECKING, Any, NamedTuple
 
 import numpy as np
 
@@ -153,10 +153,11 @@ def as_svg(figure: "Figure", name: str, description: str) -> str:
     import matplotlib
     from matplotlib.backends.backend_svg import FigureCanvasSVG
 
-    settings = {"svg.hashsalt": f"bidcheck-{name}", "svg.fonttype": "none", "font.family": "sans-serif"}
+    settings: Any = {"svg.hashsalt": f"bidcheck-{name}", "svg.fonttype": "none", "font.family": "sans-serif"}
     out = io.StringIO()
     with matplotlib.rc_context(settings):
-        FigureCanvasSVG(figure).print_svg(out, metadata={"Date": None, "Creator": None})
+        canvas: Any = FigureCanvasSVG(figure)
+        canvas.print_svg(out, metadata={"Date": None, "Creator": None})
     text = out.getvalue()
     text = text[text.index("<svg") :]
     ids = re.findall(r'\bid="([^"]+)"', text)
