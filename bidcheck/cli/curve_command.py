@@ -4,7 +4,8 @@ from pathlib import Path
 
 import click
 
-from bidcheck.cli.guarded import console, guarded
+from bidcheck.cli.guarded import guarded, wrong_usage
+from bidcheck.cli.targets import refuse_file
 
 ANY_SPEED = 1450.0
 """Speed put into the object where none is given [1/min]; nothing printed depends on it."""
@@ -22,27 +23,41 @@ def command(file: Path, units: str, speed: str | None, stages: int, picture: Pat
 
     Power is taken as shaft power with cold water.
     """
-    from bidcheck.errors import UnitError
+    if picture is not None:
+        if picture.suffix.lower() != ".svg":
+            raise wrong_usage(f"--picture {picture}: the picture is SVG; give a name that ends in .svg")
+        refuse_file("--picture", picture, inputs=(file,))
+    speed_rpm = None if speed is None else _speed(speed)
+    from bidcheck.cli.screen import screen
     from bidcheck.fit import fit_curve
-    from bidcheck.quantity import Kind, UnitSystem
+    from bidcheck.quantity import UnitSystem
     from bidcheck.read import read_curve_file
     from bidcheck.report.curve_text import print_curve, specific_speed_lines
+
+    system, console = UnitSystem(units), screen()
+    (curve,) = read_curve_file(file, speed_rpm=speed_rpm or ANY_SPEED)
+    fits = fit_curve(curve)
+    if picture is not None:
+        from bidcheck.cli.write import write_atomically
+        from bidcheck.report.figures import curve_figure
+
+        write_atomically(picture, curve_figure(fits, curve, system))
+    print_curve(fits, curve, console, system)
+    if speed_rpm is not None:
+        for line in specific_speed_lines(fits, speed_rpm, stages, system):
+            console.print(line)
+
+
+def _speed(text: str) -> float:
+    """Speed as written on the command line. [1/min]"""
+    from bidcheck.errors import UnitError
+    from bidcheck.quantity import Kind
     from bidcheck.units import parse
 
-    system = UnitSystem[units.upper()]
     try:
-        speed_rpm = None if speed is None else parse(speed, Kind.SPEED).value
+        speed_rpm = parse(text, Kind.SPEED).value
     except UnitError as error:
-        raise click.BadParameter(str(error), param_hint="--speed") from error
-    screen = console()
-    for curve in read_curve_file(file, speed_rpm=speed_rpm or ANY_SPEED):
-        fits = fit_curve(curve)
-        print_curve(fits, curve, screen, system)
-        if speed_rpm is not None:
-            for line in specific_speed_lines(fits, speed_rpm, stages, system):
-                screen.print(line)
-        if picture is not None:
-            from bidcheck.cli.write import write_atomically
-            from bidcheck.report.figures import curve_figure
-
-            write_atomically(picture, curve_figure(fits, curve, system))
+        raise wrong_usage(f"--speed: {error}") from error
+    if speed_rpm <= 0.0:
+        raise wrong_usage(f'--speed: "{text}" is not above zero')
+    return speed_rpm
