@@ -17,6 +17,8 @@ if TYPE_CHECKING:
 
 WIDTH, HEIGHT = 9.0, 4.6
 """Size of a figure [in]."""
+HALO: Any = {"boxstyle": "square,pad=0.1", "facecolor": "white", "edgecolor": "none", "alpha": 0.8}
+"""White behind words, so that a curve beneath does not strike them out."""
 
 
 class Look(NamedTuple):
@@ -64,11 +66,11 @@ def axis_label(words: str, kind: Kind, system: UnitSystem) -> str:
     return f"{words} [{kind.printed(system).unit}]"
 
 
-def new_figure(x_label: str, y_label: str) -> "tuple[Figure, Axes]":
+def new_figure(x_label: str, y_label: str, height: float = HEIGHT) -> "tuple[Figure, Axes]":
     """An empty figure with one pair of axes."""
     from matplotlib.figure import Figure
 
-    figure = Figure(figsize=(WIDTH, HEIGHT), layout="constrained")
+    figure = Figure(figsize=(WIDTH, height), layout="constrained")
     axes = figure.add_subplot()
     axes.set_xlabel(x_label)
     axes.set_ylabel(y_label)
@@ -128,6 +130,9 @@ def label_ends(axes: "Axes", labels: Sequence[tuple[str, float, float, str]]) ->
                 fontsize=9,
                 va="center",
                 annotation_clip=False,
+                parse_math=False,
+                bbox=HALO,
+                zorder=7,
                 arrowprops={"arrowstyle": "-", "color": colour, "linewidth": 0.5, "shrinkA": 0, "shrinkB": 2},
             )
 

@@ -10,6 +10,7 @@ from bidcheck.evaluation import BidEvaluation, Evaluation
 from bidcheck.inquiry import Duty
 from bidcheck.quantity import Kind, UnitSystem
 from bidcheck.report.drawing import (
+    HALO,
     Look,
     as_svg,
     axis_label,
@@ -19,37 +20,45 @@ from bidcheck.report.drawing import (
     new_figure,
     one,
 )
-from bidcheck.report.format import plain
+from bidcheck.report.format import bare, plain
+from bidcheck.report.overlays import draw_available, draw_estimates
 
 if TYPE_CHECKING:
     from matplotlib.axes import Axes
+    from matplotlib.figure import Figure
 
-ERROR_FLOOR, ERROR_SHARE = 0.025, 0.15
-"""Half width of the independent band: the larger of 2.5 points and 0.15 of the losses. Source: derived, see methods."""
 STEPS = 120
 
 
 def head_figure(evaluation: Evaluation, system: UnitSystem) -> str:
     """Head of every bid at its offered diameter, as pumped, with the duty and the operating range. SVG text."""
+    figure = drawn_head(evaluation, system)
+    return as_svg(figure, "head", "Head against flow for every bid, with the duty and the operating range.")
+
+
+def drawn_head(evaluation: Evaluation, system: UnitSystem) -> "Figure":
+    """The figure behind `head_figure`, axes in the units printed."""
     figure, axes = new_figure(axis_label("flow", Kind.FLOW, system), axis_label("head", Kind.HEAD, system))
     _draw_all(axes, evaluation, "head", Kind.HEAD, system)
     duty = evaluation.inquiry.duty
     x, y = one(duty.rated_flow, Kind.FLOW, system), one(duty.rated_head, Kind.HEAD, system)
     axes.plot([x], [y], marker="+", markersize=16, markeredgewidth=2.2, color="black", linestyle="none", zorder=6)
-    axes.annotate("duty", (x, y), xytext=(7, 9), textcoords="offset points", fontsize=9, weight="bold")
-    axes.set_ylim(bottom=0.6 * axes.get_ylim()[0])
+    axes.annotate("duty", (x, y), xytext=(7, 9), textcoords="offset points", fontsize=9, weight="bold", bbox=HALO)
+    low, high = axes.get_ylim()
+    axes.set_ylim(bottom=max(0.0, low - 0.25 * (high - low)))
     _finish(axes, evaluation, "head", Kind.HEAD, system)
-    return as_svg(figure, "head", "Head against flow for every bid, with the duty and the operating range.")
+    return figure
 
 
 def efficiency_figure(evaluation: Evaluation, system: UnitSystem) -> str:
     """Efficiency of every bid, and at its best efficiency what independent estimates expect. SVG text."""
-    figure, axes = new_figure(axis_label("flow", Kind.FLOW, system), axis_label("efficiency", Kind.SHARE, system))
+    figure, axes = new_figure(
+        axis_label("flow", Kind.FLOW, system), axis_label("efficiency", Kind.SHARE, system), height=6.0
+    )
     _draw_all(axes, evaluation, "efficiency", Kind.SHARE, system)
-    for index, bid in enumerate(evaluation.bids):
-        _draw_estimate(axes, bid, look(index), system)
-    axes.set_ylim(bottom=0.0)
+    axes.set_ylim(0.0, 100.0)
     _finish(axes, evaluation, "efficiency", Kind.SHARE, system)
+    draw_estimates(axes, evaluation, system)
     return as_svg(
         figure,
         "efficiency",
@@ -62,10 +71,10 @@ def npsh_figure(evaluation: Evaluation, system: UnitSystem) -> str:
     """NPSH3 of every bid against NPSH available at the flows where the inquiry gives it. SVG text."""
     figure, axes = new_figure(axis_label("flow", Kind.FLOW, system), axis_label("NPSH", Kind.NPSH, system))
     _draw_all(axes, evaluation, "npsh3", Kind.NPSH, system)
-    _draw_available(axes, evaluation, system)
-    axes.set_ylim(bottom=0.0)
+    draw_available(axes, evaluation, system)
+    axes.set_ylim(0.0, 1.06 * axes.get_ylim()[1])
     _finish(axes, evaluation, "npsh3", Kind.NPSH, system)
-    return as_svg(figure, "npsh", "NPSH3 against flow for every bid, with NPSH available.")
+    return as_svg(figure, "npsh", "NPSH3 against flow for every bid, with NPSH available and the margin wanted.")
 
 
 def curve_figure(fits: Fits, curve: Curve, system: UnitSystem) -> str:
@@ -130,8 +139,9 @@ def _draw_bid(  # noqa: PLR0917
         found, fits_there = one(item.value, kind, system), one(item.would_fit, kind, system)
         axes.plot([x0, x0], [found, fits_there], color=how.colour, linewidth=0.8, linestyle=":")
         axes.plot([x0], [found], marker="x", markersize=9, markeredgewidth=2, color=how.colour, linestyle="none")
+        words = f"odd point, {bare(item.would_fit, kind, system)} would fit"
         axes.annotate(
-            "odd point", (x0, found), xytext=(8, -3), textcoords="offset points", fontsize=8, color=how.colour
+            words, (x0, found), xytext=(8, -3), textcoords="offset points", fontsize=8, color=how.colour, bbox=HALO
         )
 
 
@@ -144,41 +154,12 @@ def _shade_range(axes: "Axes", duty: Duty, system: UnitSystem) -> None:
     axes.axvline(one(duty.rated_flow, Kind.FLOW, system), color="#888888", linewidth=0.8, zorder=1)
 
 
-def _draw_estimate(axes: "Axes", bid: BidEvaluation, how: Look, system: UnitSystem) -> None:
-    """Expected band and attainable value at best efficiency flow of the largest diameter given."""
-    estimate, fits = bid.case.estimates.efficiency, bid.case.max_fits
-    bep = fits.bep if fits is not None else None
-    if estimate is None or bep is None:
-        return
-    x = one(bep.flow, Kind.FLOW, system)
-    if estimate.expected is not None:
-        half = max(ERROR_FLOOR, ERROR_SHARE * (1.0 - estimate.expected))
-        low, high = 100 * (estimate.expected - half), 100 * (estimate.expected + half)
-        axes.plot([x, x], [low, high], color=how.colour, linewidth=7, alpha=0.35, solid_capstyle="butt", zorder=2)
-    if estimate.attainable is not None:
-        axes.plot([x], [100 * estimate.attainable], marker="_", markersize=14, color=how.colour, markeredgewidth=2)
-
-
-def _draw_available(axes: "Axes", evaluation: Evaluation, system: UnitSystem) -> None:
-    """NPSH available at the flows where the inquiry gives it."""
-    if not evaluation.bids:
-        return
-    known = sorted((at.flow, at.npsha) for _, at in evaluation.bids[0].case.operating if at.npsha is not None)
-    if not known:
-        return
-    x = converted(np.array([flow for flow, _ in known]), Kind.FLOW, system)
-    y = converted(np.array([npsha for _, npsha in known], dtype=np.float64), Kind.NPSH, system)
-    axes.plot(x, y, color="black", linewidth=2.2, marker="o", markersize=5, zorder=5)
-    axes.annotate(
-        "available", (x[0], y[0]), xytext=(-4, 7), textcoords="offset points", fontsize=9, weight="bold", ha="right"
-    )
-
-
 def _finish(axes: "Axes", evaluation: Evaluation, column: Column, kind: Kind, system: UnitSystem) -> None:
-    """Axes from zero, names at the ends of the curves."""
+    """Flow from zero to the last of curves and duty, names at the ends of the curves."""
     ends = list(_ends(evaluation, column, kind, system))
-    right = max((x for _, x, _, _ in ends), default=1.0)
-    axes.set_xlim(0.0, right * 1.02)
+    duty = evaluation.inquiry.duty
+    largest = one(max(duty.rated_flow, duty.max_flow or 0.0), Kind.FLOW, system)
+    axes.set_xlim(0.0, max([largest, *(x for _, x, _, _ in ends)]) * 1.02)
     label_ends(axes, ends)
 
 

@@ -1,9 +1,7 @@
 """The evaluation as one self-contained HTML page: opens from a file, prints, needs no network."""
 
-from dataclasses import dataclass
-from functools import lru_cache
-from importlib.resources import files
-from typing import TYPE_CHECKING, Any
+from dataclasses import dataclass, replace
+from typing import Any
 
 from bidcheck.case import Source
 from bidcheck.evaluation import BidEvaluation, Evaluation
@@ -12,6 +10,7 @@ from bidcheck.limits import limit_names
 from bidcheck.quantity import Kind, UnitSystem
 from bidcheck.report.figures import efficiency_figure, head_figure, npsh_figure, without
 from bidcheck.report.format import figure, plain
+from bidcheck.report.page_template import template
 from bidcheck.report.tabulation import margin_in_words, tabulation
 from bidcheck.report.words import (
     CAUTION,
@@ -27,8 +26,8 @@ from bidcheck.report.words import (
     question,
 )
 
-if TYPE_CHECKING:
-    import jinja2
+
+PLURAL = {Verdict.FAIL: "fails", Verdict.QUERY: "queries", Verdict.REMARK: "remarks"}
 
 
 @dataclass(frozen=True, slots=True)
@@ -49,20 +48,6 @@ class Spoken:
     source: str
 
 
-@lru_cache(maxsize=1)
-def _environment() -> "jinja2.Environment":
-    """Templates escape everything that is not marked as markup."""
-    import jinja2
-
-    return jinja2.Environment(
-        loader=jinja2.FunctionLoader(lambda name: files("bidcheck.report").joinpath(name).read_text("utf-8")),
-        autoescape=True,
-        undefined=jinja2.StrictUndefined,
-        trim_blocks=True,
-        lstrip_blocks=True,
-    )
-
-
 def evaluation_page(evaluation: Evaluation, *, system: UnitSystem) -> str:
     """Write the page.
 
@@ -78,32 +63,28 @@ def evaluation_page(evaluation: Evaluation, *, system: UnitSystem) -> str:
         HTML text; the same evaluation gives the same bytes.
     """
     inquiry = evaluation.inquiry
-    return (
-        _environment()
-        .get_template("page.html.j2")
-        .render(
-            tag=plain(inquiry.tag),
-            title=plain(inquiry.title),
-            duty=_duty(evaluation, system),
-            limit_set=inquiry.limits.set_name,
-            version=evaluation.version,
-            summary=[_summary(bid, system) for bid in evaluation.bids],
-            bids=[_bid(bid, system) for bid in evaluation.bids],
-            unreadable=[
-                {"bidder": plain(bid.bidder), "problems": [plain(str(problem)) for problem in bid.problems]}
-                for bid in inquiry.unreadable
-            ],
-            table=tabulation(evaluation, system),
-            figures=_figures(evaluation, system),
-            estimates=[_estimate(bid, system) for bid in evaluation.bids],
-            limits=_limits(evaluation, system),
-            mark_words=MARK_WORDS,
-            assumptions=inquiry.assumptions,
-            inputs=inquiry.inputs,
-            sources=sorted({finding.source for bid in evaluation.bids for finding in bid.findings}),
-            caution=CAUTION,
-            how_sharp=HOW_SHARP,
-        )
+    return template("page.html.j2").render(
+        tag=plain(inquiry.tag),
+        title=plain(inquiry.title),
+        duty=_duty(evaluation, system),
+        limit_set=inquiry.limits.set_name,
+        version=evaluation.version,
+        summary=[_summary(bid, system) for bid in evaluation.bids],
+        bids=[_bid(bid, system) for bid in evaluation.bids],
+        unreadable=[
+            {"bidder": plain(bid.bidder), "problems": [plain(str(problem)) for problem in bid.problems]}
+            for bid in inquiry.unreadable
+        ],
+        table=tabulation(evaluation, system),
+        figures=_figures(evaluation, system),
+        estimates=[_estimate(bid, system) for bid in evaluation.bids],
+        limits=_limits(evaluation, system),
+        mark_words=MARK_WORDS,
+        assumptions=inquiry.assumptions,
+        inputs=inquiry.inputs,
+        sources=sorted({finding.source for bid in evaluation.bids for finding in bid.findings}),
+        caution=CAUTION,
+        how_sharp=HOW_SHARP,
     )
 
 
@@ -136,7 +117,7 @@ def _summary(bid: BidEvaluation, system: UnitSystem) -> dict[str, str]:
     estimate = case.estimates.efficiency
     counts = counted(bid.findings)
     loud = [
-        f"{counts[verdict]} {VERDICT_WORDS[verdict]}"
+        _count(counts[verdict], verdict)
         for verdict in (Verdict.FAIL, Verdict.QUERY, Verdict.NO_DATA, Verdict.REMARK)
         if counts[verdict]
     ]
@@ -154,6 +135,12 @@ def _summary(bid: BidEvaluation, system: UnitSystem) -> dict[str, str]:
         "margin": margin_in_words(bid, system),
         "power": figure(case.at_duty.power, Kind.POWER, system),
     }
+
+
+def _count(number: int, verdict: Verdict) -> str:
+    """A number of verdicts in words: "1 query", "2 queries"."""
+    word = VERDICT_WORDS[verdict] if number == 1 else PLURAL.get(verdict, VERDICT_WORDS[verdict])
+    return f"{number} {word}"
 
 
 def _spoken(finding: Finding, system: UnitSystem) -> Spoken:
@@ -184,13 +171,23 @@ def _bid(bid: BidEvaluation, system: UnitSystem) -> dict[str, Any]:
         "anchor": plain(bid.case.bid.bidder),
         "outcome": OUTCOME_WORDS[bid.outcome],
         "outcome_id": bid.outcome.value,
-        "loud": [_spoken(finding, system) for finding in against(bid.findings)],
+        "loud": _asked_once([_spoken(finding, system) for finding in against(bid.findings)]),
         "quiet": [_spoken(finding, system) for finding in bid.findings if finding.verdict in quiet],
         "assumptions": [
             {"what": plain(item.what), "value": plain(item.value), "why": plain(item.why)}
             for item in bid.case.assumptions
         ],
     }
+
+
+def _asked_once(findings: list[Spoken]) -> list[Spoken]:
+    """The same findings, a question that was asked before left out."""
+    asked: set[str] = set()
+    once = []
+    for item in findings:
+        once.append(replace(item, question="") if item.question in asked else item)
+        asked.add(item.question)
+    return once
 
 
 def _figures(evaluation: Evaluation, system: UnitSystem) -> list[dict[str, Any]]:
@@ -209,14 +206,16 @@ def _figures(evaluation: Evaluation, system: UnitSystem) -> list[dict[str, Any]]
             "Efficiency",
             efficiency_figure(evaluation, system),
             "Fitted efficiency of each bid. At each best efficiency (maximum diameter where a curve of it is given) the"
-            " wide bar is the independent expectation with its error, the short line what the published chart calls"
-            " attainable.",
+            " wide bar under the bid's marker is the independent expectation with its error, the short line what the"
+            " published chart calls attainable; bars that would meet are moved apart.",
             without(evaluation, "efficiency"),
         ),
         (
             "NPSH",
             npsh_figure(evaluation, system),
-            "Fitted NPSH3 of each bid against NPSH available, drawn only at the flows the inquiry gives it for.",
+            "Fitted NPSH3 of each bid against NPSH available at the flows the inquiry gives it for (joined by straight"
+            " lines). Beneath it, dashed, the highest NPSH3 that keeps the ordinary margin; where a high suction"
+            " specific speed asks for more, the finding says so.",
             without(evaluation, "npsh3"),
         ),
     )
