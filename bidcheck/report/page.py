@@ -26,7 +26,6 @@ from bidcheck.report.words import (
     question,
 )
 
-
 PLURAL = {Verdict.FAIL: "fails", Verdict.QUERY: "queries", Verdict.REMARK: "remarks"}
 
 
