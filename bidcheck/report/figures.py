@@ -56,7 +56,7 @@ def efficiency_figure(evaluation: Evaluation, system: UnitSystem) -> str:
         axis_label("flow", Kind.FLOW, system), axis_label("efficiency", Kind.SHARE, system), height=6.0
     )
     _draw_all(axes, evaluation, "efficiency", Kind.SHARE, system)
-    axes.set_ylim(0.0, 100.0)
+    axes.set_ylim(0.0, min(100.0, max(60.0, axes.get_ylim()[1] + 5.0)))
     _finish(axes, evaluation, "efficiency", Kind.SHARE, system)
     draw_estimates(axes, evaluation, system)
     return as_svg(

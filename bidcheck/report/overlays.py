@@ -5,6 +5,7 @@ from typing import TYPE_CHECKING, NamedTuple
 
 import numpy as np
 
+from bidcheck.checks.npsh_margin import is_raised
 from bidcheck.evaluation import Evaluation
 from bidcheck.inquiry import Duty
 from bidcheck.limits import Limits
@@ -49,7 +50,7 @@ def draw_estimates(axes: "Axes", evaluation: Evaluation, system: UnitSystem) -> 
             half = max(ERROR_FLOOR, ERROR_SHARE * (1.0 - estimate.expected))
             low, high = 100 * (estimate.expected - half), 100 * (estimate.expected + half)
             axes.plot([x, x], [low, high], color=how.colour, linewidth=6, alpha=0.35, solid_capstyle="butt", zorder=2)
-            axes.plot([x], [high + 1.2], marker=how.marker, markersize=3.5, color=how.colour, zorder=5)
+            axes.plot([x], [low - 1.4], marker=how.marker, markersize=3.5, color=how.colour, zorder=5)
         if estimate.attainable is not None:
             y = 100 * estimate.attainable
             axes.plot([x], [y], marker="_", markersize=8, color=how.colour, markeredgewidth=2.2, zorder=5)
@@ -70,23 +71,46 @@ def draw_available(axes: "Axes", evaluation: Evaluation, system: UnitSystem) -> 
     if not known:
         return
     flow, npsha = (np.array(column, dtype=np.float64) for column in zip(*known, strict=True))
-    kept = np.array([highest_npsh3(value, evaluation.inquiry.limits) for value in npsha])
-    x, y, low = (converted(v, k, system) for v, k in ((flow, Kind.FLOW), (npsha, Kind.NPSH), (kept, Kind.NPSH)))
+    x, y = converted(flow, Kind.FLOW, system), converted(npsha, Kind.NPSH, system)
     axes.plot(x, y, color="black", linewidth=2.2, marker="o", markersize=5, zorder=5)
-    axes.plot(x, low, color="black", linewidth=1.0, linestyle="--", marker="_", markersize=9, zorder=5)
-    for words, place, above in (("available", y[0], 6), ("less margin wanted", low[0], -10)):
-        axes.annotate(
-            words,
-            (x[0], place),
-            xytext=(-6, above),
-            textcoords="offset points",
-            fontsize=9,
-            ha="right",
-            va="center",
-            weight="bold" if above > 0 else "normal",
-            bbox=HALO,
-            zorder=6,
-        )
+    _name(axes, "available", x[0], y[0], bold=True)
+    wanted = margins_wanted(evaluation)
+    for raised in wanted:
+        kept = np.array([highest_npsh3(value, evaluation.inquiry.limits, raised) for value in npsha])
+        low = converted(kept, Kind.NPSH, system)
+        style = ":" if raised else "--"
+        axes.plot(x, low, color="black", linewidth=1.1, linestyle=style, marker="_", markersize=9, zorder=5)
+        _name(axes, "less raised margin" if raised and len(wanted) > 1 else "less margin wanted", x[0], low[0])
+
+
+def _name(axes: "Axes", words: str, x: float, y: float, bold: bool = False) -> None:
+    """Write what a line is at its left end."""
+    axes.annotate(
+        words,
+        (x, y),
+        xytext=(-8, 6 if bold else -6),
+        textcoords="offset points",
+        fontsize=9,
+        ha="right",
+        va="center",
+        weight="bold" if bold else "normal",
+        bbox=HALO,
+        zorder=6,
+    )
+
+
+def margins_wanted(evaluation: Evaluation) -> list[bool]:
+    """Which margins some bid is held against: the ordinary (False), the one raised for suction specific speed (True).
+
+    The ordinary one where no bid is held against any.
+    """
+    held = {
+        is_raised(bid.case, at)
+        for bid in evaluation.bids
+        for _, at in bid.case.operating
+        if at.npsh3 is not None and at.npsha is not None
+    }
+    return sorted(held) or [False]
 
 
 def available(evaluation: Evaluation) -> list[tuple[float, float]]:
@@ -101,8 +125,8 @@ def _flows(duty: Duty) -> list[float]:
     return sorted({q for q in (duty.min_flow, duty.normal_flow, duty.rated_flow, duty.max_flow) if q is not None})
 
 
-def highest_npsh3(npsha: float, limits: Limits) -> float:
-    """NPSH3 that just keeps the ordinary margin, by difference and by ratio; the stricter governs. [m]"""
-    by_margin = npsha - (limits.npsh_margin.at_least or 0.0)
-    by_ratio = npsha / (limits.npsh_ratio.at_least or 1.0)
-    return min(by_margin, by_ratio)
+def highest_npsh3(npsha: float, limits: Limits, raised: bool) -> float:
+    """NPSH3 that just keeps the margin wanted, by difference and by ratio; the stricter governs. [m]"""
+    margin = limits.npsh_margin_raised if raised else limits.npsh_margin
+    share = limits.npsh_ratio_raised if raised else limits.npsh_ratio
+    return min(npsha - (margin.at_least or 0.0), npsha / (share.at_least or 1.0))

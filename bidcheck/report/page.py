@@ -1,5 +1,6 @@
 """The evaluation as one self-contained HTML page: opens from a file, prints, needs no network."""
 
+import re
 from dataclasses import dataclass, replace
 from typing import Any
 
@@ -205,7 +206,7 @@ def _figures(evaluation: Evaluation, system: UnitSystem) -> list[dict[str, Any]]
             "Efficiency",
             efficiency_figure(evaluation, system),
             "Fitted efficiency of each bid. At each best efficiency (maximum diameter where a curve of it is given) the"
-            " wide bar under the bid's marker is the independent expectation with its error, the short line what the"
+            " wide bar over the bid's marker is the independent expectation with its error, the short line what the"
             " published chart calls attainable; bars that would meet are moved apart.",
             without(evaluation, "efficiency"),
         ),
@@ -213,8 +214,8 @@ def _figures(evaluation: Evaluation, system: UnitSystem) -> list[dict[str, Any]]
             "NPSH",
             npsh_figure(evaluation, system),
             "Fitted NPSH3 of each bid against NPSH available at the flows the inquiry gives it for (joined by straight"
-            " lines). Beneath it, dashed, the highest NPSH3 that keeps the ordinary margin; where a high suction"
-            " specific speed asks for more, the finding says so.",
+            " lines). Beneath it, dashed, the highest NPSH3 that keeps the margin the bids are held against; dotted"
+            " where that margin is raised for high suction specific speed.",
             without(evaluation, "npsh3"),
         ),
     )
@@ -262,13 +263,18 @@ def _source(source: Source, system: UnitSystem) -> dict[str, str]:
 
 def _limits(evaluation: Evaluation, system: UnitSystem) -> list[dict[str, str]]:
     """Every limit in force."""
-    names = limit_names()
+    names, limits = limit_names(), evaluation.inquiry.limits
+
+    def _spelt(meaning: str) -> str:
+        """A meaning with the figure of any other limit it names."""
+        return re.sub("`(.+?)`", lambda found: limit_in_words(getattr(limits, found[1]), system), meaning)
+
     return [
         {
-            "meaning": names[limit.name][1],
+            "meaning": _spelt(names[limit.name][1]),
             "words": limit_in_words(limit, system) + (", mandatory" if limit.mandatory else ""),
             "origin": plain(limit.origin),
             "mark": limit.mark,
         }
-        for limit in evaluation.inquiry.limits.all()
+        for limit in limits.all()
     ]

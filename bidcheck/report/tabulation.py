@@ -5,9 +5,9 @@ from dataclasses import dataclass
 
 from bidcheck.evaluation import BidEvaluation, Evaluation
 from bidcheck.finding import Verdict
-from bidcheck.limits import Limit
+from bidcheck.limits import Limit, Limits
 from bidcheck.quantity import Kind, UnitSystem
-from bidcheck.report.format import NOTHING, figure
+from bidcheck.report.format import NOTHING, figure, plain
 from bidcheck.report.words import OUTCOME_WORDS, limit_in_words
 
 DEVIATIONS = (Verdict.FAIL, Verdict.QUERY)
@@ -43,7 +43,7 @@ def least_margin(bid: BidEvaluation) -> tuple[float, float] | None:
 def tabulation(evaluation: Evaluation, system: UnitSystem) -> Tabulation:
     """Tabulate an evaluation in the units asked for."""
     rows = [_row(evaluation, system, item) for item in _items(evaluation, system)]
-    return Tabulation([bid.case.bid.name for bid in evaluation.bids], rows)
+    return Tabulation([plain(bid.case.bid.name) for bid in evaluation.bids], rows)
 
 
 def _row(evaluation: Evaluation, system: UnitSystem, item: "Item") -> Row:
@@ -137,7 +137,7 @@ def _suction(evaluation: Evaluation, system: UnitSystem) -> list[Item]:
             "least NPSH margin",
             Kind.TEXT,
             lambda b: margin_in_words(b, system),
-            _words(limits.npsh_margin, system),
+            _margin_wanted(limits, system),
             both,
         ),
         (
@@ -173,6 +173,16 @@ def _estimate(bid: BidEvaluation, name: str) -> float | None:
     estimate = bid.case.estimates.efficiency
     value: float | None = getattr(estimate, name) if estimate is not None else None
     return value
+
+
+def _margin_wanted(limits: Limits, system: UnitSystem) -> str:
+    """The ordinary margin, and the raised one with the suction specific speed above which it is wanted."""
+    words = _words(limits.npsh_margin, system)
+    raised, ordinary = limits.npsh_margin_raised.at_least, limits.nss_ordinary.at_most
+    if raised is None or ordinary is None or raised == limits.npsh_margin.at_least:
+        return words
+    high = figure(ordinary, Kind.SUCTION_SPECIFIC_SPEED, system)
+    return f"{words}; {figure(raised, Kind.NPSH, system)} above suction specific speed {high}"
 
 
 def _words(limit: Limit, system: UnitSystem) -> str:

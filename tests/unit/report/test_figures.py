@@ -11,6 +11,7 @@ from bidcheck.evaluation import Evaluation
 from bidcheck.quantity import UnitSystem
 from bidcheck.report.drawing import LOOKS, spread
 from bidcheck.report.figures import curve_figure, efficiency_figure, head_figure, npsh_figure, without
+from bidcheck.report.overlays import available, highest_npsh3, margins_wanted
 from tests.build import EXAMPLES, inquiry, points, sound_bid, sound_curve
 
 FIGURES = [head_figure, efficiency_figure, npsh_figure]
@@ -147,3 +148,37 @@ def test_one_curve_without_efficiency_draws_head_alone():
     found = texts(curve_figure(case.fits, case.curve, UnitSystem.US))
     assert "head [ft]" in found
     assert "efficiency [%]" not in found
+
+
+@pytest.mark.parametrize(
+    ("npsha", "raised", "highest"),
+    [
+        (6.8, False, 6.8 / 1.10),  # ratio governs: 0.618 m > 0.6 m
+        (6.0, False, 6.0 - 0.6),  # difference governs: 0.6 m > 0.545 m
+        (6.8, True, 6.8 / 1.20),
+        (5.0, True, 5.0 - 1.0),
+    ],
+)
+def test_the_stricter_of_difference_and_ratio_governs_the_margin(npsha, raised, highest):
+    base = inquiry().limits
+    least = {"npsh_margin": 0.6, "npsh_ratio": 1.10, "npsh_margin_raised": 1.0, "npsh_ratio_raised": 1.20}
+    limits = replace(base, **{name: replace(getattr(base, name), at_least=value) for name, value in least.items()})
+    assert highest_npsh3(npsha, limits, raised) == pytest.approx(highest)
+
+
+def test_the_raised_margin_is_drawn_where_a_bid_is_held_against_it():
+    base = inquiry().limits
+    ordinary = replace(base, nss_ordinary=replace(base.nss_ordinary, at_most=1000.0))
+    always = replace(base, nss_ordinary=replace(base.nss_ordinary, at_most=1.0))
+    assert margins_wanted(evaluated(limits=ordinary)) == [False]
+    assert margins_wanted(evaluated(limits=always)) == [True]
+    assert margins_wanted(evaluated(sound_bid(curves=()), limits=always)) == [False]
+
+
+def test_npsh_available_is_known_only_where_the_inquiry_gives_it():
+    base = inquiry().duty
+    assert [npsha for _, npsha in available(evaluated())] == [6.8, 6.3]
+    assert [npsha for _, npsha in available(evaluated(duty=replace(base, npsha_at_max_flow=None)))] == [6.8]
+    nothing = evaluated(duty=replace(base, npsha=None, npsha_at_max_flow=None))
+    assert available(nothing) == []
+    assert "available" not in texts(npsh_figure(nothing, UnitSystem.SI))

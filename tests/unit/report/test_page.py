@@ -218,3 +218,20 @@ def test_a_limit_origin_from_the_inquiry_is_escaped():
     page = evaluation_page(bidcheck.evaluate(inquiry(limits=limits)), system=UnitSystem.SI)
     assert "<i>clause" not in page
     assert "<i>clause 4</i>" in words_of(page)
+
+
+def test_limits_are_told_by_figures_not_by_names(page):
+    assert "nss_ordinary" not in page
+    assert "`" not in words_of(page)
+
+
+def test_no_line_breaks_between_a_figure_and_its_unit(evaluation):
+    page = evaluation_page(evaluation, system=UnitSystem.SI)
+    rated = page[page.index("rated flow") : page.index("rated head")]
+    assert "m³/h" in rated
+    assert " m³/h" not in rated
+
+
+def test_the_same_question_is_asked_once_per_bid():
+    page = words_of(evaluation_page(example("boiler_feed"), system=UnitSystem.US))
+    assert page.count("Please state NPSH3 at rated flow") == 1
