@@ -7,7 +7,7 @@ from typing import Any
 from bidcheck.case import Source
 from bidcheck.evaluation import BidEvaluation, Evaluation
 from bidcheck.finding import Finding, Verdict
-from bidcheck.limits import limit_names
+from bidcheck.limits import Limit, limit_names
 from bidcheck.quantity import Kind, UnitSystem
 from bidcheck.report.figures import efficiency_figure, head_figure, npsh_figure, without
 from bidcheck.report.format import figure, plain
@@ -265,16 +265,21 @@ def _limits(evaluation: Evaluation, system: UnitSystem) -> list[dict[str, str]]:
     """Every limit in force."""
     names, limits = limit_names(), evaluation.inquiry.limits
 
-    def _spelt(meaning: str) -> str:
+    def spelt(meaning: str) -> str:
         """A meaning with the figure of any other limit it names."""
-        return re.sub("`(.+?)`", lambda found: limit_in_words(getattr(limits, found[1]), system), meaning)
+        return re.sub("`(.+?)`", lambda found: _bound(getattr(limits, found[1]), system), meaning)
 
     return [
         {
-            "meaning": _spelt(names[limit.name][1]),
+            "meaning": spelt(names[limit.name][1]),
             "words": limit_in_words(limit, system) + (", mandatory" if limit.mandatory else ""),
             "origin": plain(limit.origin),
             "mark": limit.mark,
         }
         for limit in limits.all()
     ]
+
+
+def _bound(limit: Limit, system: UnitSystem) -> str:
+    """The figure of a limit alone, to stand in a sentence."""
+    return figure(limit.at_least if limit.at_most is None else limit.at_most, limit.kind, system)

@@ -43,4 +43,4 @@ def tied(text: str) -> str:
     >>> tied("at 520 m³/h for 3 more")
     'at 520\xa0m³/h for 3 more'
     """
-    return _BEFORE_UNIT.sub("\u00a0", text)
+    return _BEFORE_UNIT.sub("\u00a0", text).replace("US gpm", "US\u00a0gpm")

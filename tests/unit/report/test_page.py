@@ -222,6 +222,8 @@ def test_a_limit_origin_from_the_inquiry_is_escaped():
 
 def test_limits_are_told_by_figures_not_by_names(page):
     assert "nss_ordinary" not in page
+    assert "above at most" not in page
+    assert "where suction specific speed is above" in words_of(page)
     assert "`" not in words_of(page)
 
 
