@@ -147,7 +147,7 @@ def water_density(temperature: float) -> float:
     """
     _check_temperature(temperature)
     tau = 1.0 - temperature / CRITICAL_TEMPERATURE
-    return CRITICAL_DENSITY * (1.0 + sum(b * tau ** (third / 3.0) for b, third in _LIQUID_DENSITY))
+    return CRITICAL_DENSITY * (1.0 + sum(b * math.pow(tau, third / 3.0) for b, third in _LIQUID_DENSITY))
 
 
 def water_viscosity(temperature: float) -> float:

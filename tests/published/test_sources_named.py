@@ -10,7 +10,7 @@ SELF = Path(__file__).name
 MODULES = sorted(path for path in HERE.glob("test_*.py") if path.name != SELF)
 
 
-def tests_without_source(text: str) -> list[str]:
+def unsourced(text: str) -> list[str]:
     """Names of the test functions whose comment directly above holds no line `# source: ` with words after it."""
     lines = text.splitlines()
     missing = []
@@ -31,7 +31,7 @@ def tests_without_source(text: str) -> list[str]:
 
 @pytest.mark.parametrize("module", MODULES, ids=lambda path: path.name)
 def test_every_published_test_names_its_source(module):
-    assert tests_without_source(module.read_text(encoding="utf-8")) == []
+    assert unsourced(module.read_text(encoding="utf-8")) == []
 
 
 def test_there_are_modules_to_look_at():
@@ -49,7 +49,7 @@ def test_there_are_modules_to_look_at():
     ],
 )
 def test_a_test_without_a_source_is_refused(text):
-    assert tests_without_source(text) == ["test_a"]
+    assert unsourced(text) == ["test_a"]
 
 
 @pytest.mark.parametrize(
@@ -61,4 +61,4 @@ def test_a_test_without_a_source_is_refused(text):
     ],
 )
 def test_a_test_with_a_source_is_accepted(text):
-    assert tests_without_source(text) == []
+    assert unsourced(text) == []
