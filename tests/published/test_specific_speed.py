@@ -54,6 +54,6 @@ def test_suction_specific_speed(speed, flow, npsh3, metric, us):
     assert_as_printed(specific_speed_us(nss), us)
 
 
-# source: GB 19762-2007, Annex A, worked example, double suction: n_s' = 3.65 n √(Q/2) / H^0.75, 800 m³/h, 12 m, 1470 rpm
+# source: GB 19762-2007, Annex A, worked example, double suction: n_s' = 3.65 n √(Q/2)/H^0.75, 800 m³/h, 12 m, 1470 rpm
 def test_specific_speed_of_a_double_suction_pump():
     assert_as_printed(3.65 * specific_speed(1470, 800 * M3H / 2, 12.0), "277.4")
