@@ -83,7 +83,7 @@ def disc_friction_power(density: float, speed_rpm: float, diameter: float, visco
     Examples
     --------
     >>> disc_friction_power(998.2, speed_rpm=2960, diameter=0.214, viscosity=1.0e-6)
-    772
+    771.9
     """
     require_positive(density=density, speed=speed_rpm, diameter=diameter, viscosity=viscosity)
     omega, radius = speed_rpm * math.pi / 30.0, diameter / 2.0

@@ -1,10 +1,10 @@
 """Expected efficiency c of an honest, ordinary pump of a class: the market survey inside its range, Gülich's statistics
 less the class's own distance outside it, and a fade between the two so that c has no step.
 
-How the fade is laid: the weight w of the survey is 1 inside, and falls to 0 in the logarithm of the figure over the last
-fifth of the range at its ends: from 800 to 1000 m³/h at nominal speed, from nq 64 to 80, from nq 10 to 8. Gülich's table
-starts at 18 m³/h; its part grows from nothing there to full at 22.5 m³/h, and outside the survey it serves alone only from
-22.5 m³/h, so that c is never a step between the two, at most absent.
+How the fade is laid: the weight w of the survey is 1 inside, and falls to 0 in the logarithm of the figure over the
+last fifth of the range at its ends: from 800 to 1000 m³/h at nominal speed, from nq 64 to 80, from nq 10 to 8. Gülich's
+table starts at 18 m³/h; its part grows from nothing there to full at 22.5 m³/h, and outside the survey it serves alone
+only from 22.5 m³/h: c may be absent, but never steps from one source to the other.
 """
 
 import math
