@@ -72,7 +72,35 @@ def _source(
 
 
 def table_of(shape: Shape) -> float:
-    """Gülich's efficiency of the form that fits, per suction eye; OutOfRange outside it."""
+    """Gülich's efficiency of the form that fits, per suction eye.
+
+    Parameters
+    ----------
+    shape : Shape
+        The best efficiency point.
+
+    Returns
+    -------
+    float
+        Efficiency. [fraction]
+
+    Raises
+    ------
+    OutOfRange
+        Below 18 m³/h or outside nq 7 to 100.
+
+    Notes
+    -----
+    Source: Gülich, Centrifugal Pumps, Table 3.9
+    Valid for: from 18 m³/h, nq 7 to 100 per suction eye
+    Mark: crossed
+
+    Examples
+    --------
+    >>> table_of(Shape(arrangement="end suction", nq=20.0, nq_eye=20.0, flow=0.010, head_per_stage=20.0,
+    ...                speed_rpm=1450, stages=1, diameter=None, viscosity=1e-6, density=998.2))
+    0.6870
+    """
     return table_efficiency(shape.nq_eye, shape.flow, shape.multistage)
 
 
@@ -119,7 +147,35 @@ def attainable_of(shape: Shape) -> float:
 
 
 def ceiling_of(shape: Shape) -> LossBalance:
-    """Ceiling from the losses, with the offered diameter or, where none is stated, that of 1.2 times the optimum ψ."""
+    """Ceiling from the losses.
+
+    Parameters
+    ----------
+    shape : Shape
+        The best efficiency point.
+
+    Returns
+    -------
+    LossBalance
+        With the offered diameter or, where none is stated, that of 1.2 times the optimum head coefficient.
+
+    Raises
+    ------
+    OutOfRange
+        Outside the range below.
+
+    Notes
+    -----
+    Source: balance of power; disc friction Daily and Nece (1960), leakage Gülich Table 3.5
+    Valid for: nq 7 to 100 per suction eye
+    Mark: crossed
+
+    Examples
+    --------
+    >>> ceiling_of(Shape(arrangement="end suction", nq=27.85, nq_eye=27.85, flow=130 / 3600, head_per_stage=55.0,
+    ...           speed_rpm=2960, stages=1, diameter=0.2145, viscosity=1e-6, density=998.2)).efficiency
+    0.920
+    """
     diameter = shape.diameter
     if diameter is None:
         coefficient = SMALLER_DIAMETER * optimum_head_coefficient(shape.nq_eye)
@@ -136,7 +192,35 @@ def ceiling_of(shape: Shape) -> LossBalance:
 
 
 def balance_of(shape: Shape) -> LossBalance:
-    """Balance for information: Gülich's hydraulic efficiency, full leakage, offered or optimum diameter."""
+    """Balance of losses for information; it decides nothing.
+
+    Parameters
+    ----------
+    shape : Shape
+        The best efficiency point.
+
+    Returns
+    -------
+    LossBalance
+        Gülich's hydraulic efficiency, full leakage, offered or optimum diameter.
+
+    Raises
+    ------
+    OutOfRange
+        Outside the range below.
+
+    Notes
+    -----
+    Source: balance of power; disc friction Daily and Nece (1960), leakage Gülich Table 3.5
+    Valid for: from 18 m³/h, nq 7 to 100 per suction eye
+    Mark: crossed
+
+    Examples
+    --------
+    >>> balance_of(Shape(arrangement="end suction", nq=27.85, nq_eye=27.85, flow=130 / 3600, head_per_stage=55.0,
+    ...           speed_rpm=2960, stages=1, diameter=0.2145, viscosity=1e-6, density=998.2)).efficiency
+    0.844
+    """
     diameter = shape.diameter
     if diameter is None:
         coefficient = optimum_head_coefficient(shape.nq_eye)
