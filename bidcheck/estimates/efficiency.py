@@ -13,7 +13,8 @@ from bidcheck.case import EfficiencyEstimate
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates.expected import MULTISTAGE, expected_efficiency
 from bidcheck.estimates.loss_ceiling import LossBalance
-from bidcheck.estimates.sources import Shape, attainable_of, ceiling_of, efficiency_sources
+from bidcheck.estimates.shape import Shape, attainable_of, ceiling_of
+from bidcheck.estimates.sources import efficiency_sources
 from bidcheck.hydraulics.ranges import inside, require_positive
 
 LEAST_FLOW = 6.0

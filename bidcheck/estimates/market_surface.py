@@ -100,6 +100,15 @@ def _surface(nq: float, flow: float, c: float) -> float:
     return (88.59 * x + 13.46 * y - 11.48 * x**2 - 0.85 * y**2 - 0.38 * x * y - c) / 100.0
 
 
+def _quantile(share: float) -> float:
+    """Quantile of the normal distribution; the published shares need no import."""
+    if share in (0.10, 0.40):
+        return Z_10 if share == 0.10 else Z_40
+    from statistics import NormalDist
+
+    return NormalDist().inv_cdf(share)
+
+
 def market_efficiency(market_class: MarketClass, mei: float, nq: float, flow: float) -> float:
     """Efficiency below which a share `mei` of the surveyed market lies.
 
@@ -136,11 +145,8 @@ def market_efficiency(market_class: MarketClass, mei: float, nq: float, flow: fl
     >>> market_efficiency(ESOB_1450, 0.40, nq=30.0, flow=100 / 3600)
     0.7845
     """
-    from statistics import NormalDist
-
     require_inside("share of the market", mei, 0.01, 0.99)
-    z = NormalDist().inv_cdf(mei)
-    c = market_class.c40 + 100.0 * market_class.sigma * (Z_40 - z)
+    c = market_class.c40 + 100.0 * market_class.sigma * (Z_40 - _quantile(mei))
     return _surface(nq, flow, c)
 
 

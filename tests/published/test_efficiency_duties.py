@@ -9,7 +9,7 @@ from bidcheck.estimates.expected import CLASS_OFFSET, MULTISTAGE, market_classes
 from bidcheck.estimates.head_coefficient import diameter_for_head, optimum_head_coefficient
 from bidcheck.estimates.loss_ceiling import loss_ceiling
 from bidcheck.estimates.market_surface import MARKET_CLASSES, MSS_2900, MSV_2900, market_median
-from bidcheck.estimates.sources import Shape, balance_of
+from bidcheck.estimates.shape import Shape, balance_of
 from bidcheck.hydraulics.specific_speed import specific_speed
 from tests.published.printed import assert_as_printed
 

@@ -38,7 +38,7 @@ def gaps(text):
     return lacking
 
 
-@pytest.mark.parametrize("function", formulas(), ids=lambda function: function.__name__)
+@pytest.mark.parametrize("function", list(formulas()), ids=lambda function: function.__name__)
 def test_formula_is_documented(function):
     assert gaps(inspect.getdoc(function) or "") == []
 
