@@ -175,3 +175,16 @@ def test_figures_that_are_no_best_efficiency_point(changes):
 def test_specific_speeds_must_agree_with_the_eyes():
     with pytest.raises(ValueError, match="disagree"):
         estimate(suction_eyes=2, nq_eye=30.0)
+
+
+@pytest.mark.parametrize("nq", [10.0, 15.0, 25.0, 44.0, 80.0])
+@pytest.mark.parametrize("flow", [18.0, 150.0, 1500.0, 18000.0])
+@pytest.mark.parametrize("share_of_optimum", [0.8, 1.0, 1.2])
+def test_ceiling_never_forbids_what_the_chart_calls_attainable(nq, flow, share_of_optimum):
+    from bidcheck.estimates.head_coefficient import diameter_for_head, optimum_head_coefficient
+
+    speed = 590.0 if flow > 1000 else 1480.0
+    head = (speed * math.sqrt(flow * M3H) / nq) ** (4 / 3)
+    diameter = diameter_for_head(head, speed, share_of_optimum * optimum_head_coefficient(nq))
+    found = estimate(nq=nq, flow=flow * M3H, head_per_stage=head, speed_rpm=speed, diameter=diameter)
+    assert found.ceiling > found.attainable
