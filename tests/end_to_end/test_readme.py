@@ -37,7 +37,7 @@ def test_tests_are_installed_and_run(readme):
 def test_ci_takes_its_command_from_readme(readme):
     script = (ROOT / ".ci" / "run").read_text(encoding="utf-8")
     assert "README.md" in script
-    assert "pytest -q" not in script.replace("pytest -q tests/browser", "")
+    assert "pytest -q" not in script.replace("pytest -q -rs tests/browser", "")
     found = re.search(r"^tests_command=\$\((.*)\)$", script, re.MULTILINE)
     assert found is not None
     done = subprocess.run(["bash", "-c", found[1]], capture_output=True, text=True, cwd=ROOT, check=True)
