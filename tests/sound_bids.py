@@ -5,8 +5,8 @@ import numpy as np
 from bidcheck.bid import Bid, Claims, Driver
 from bidcheck.curve import Curve, Floats, Points
 from bidcheck.estimates.efficiency import estimate_efficiency
-from bidcheck.estimates.head_coefficient import best_head_coefficient, impeller_diameter
-from bidcheck.hydraulics.suction import npsh3_of_suction_specific_speed
+from bidcheck.estimates.head_coefficient import diameter_for_head, optimum_head_coefficient
+from bidcheck.hydraulics.suction import npsh3_from_suction_specific_speed
 from bidcheck.inquiry import Duty, Inquiry
 from tests.build import M3H, inquiry, stated
 from tests.synthetic_curves import efficiency_shape, flows_over_best, head_shape, printed
@@ -34,8 +34,8 @@ def sound_inquiry(rng: np.random.Generator, noise: float | None = None) -> Inqui
     assert estimate.attainable is not None
     efficiency = min(rng.normal(estimate.expected, ESTIMATE_ERROR), estimate.attainable - 0.003)
     scatter = rng.uniform(0.001, 0.004) if noise is None else noise
-    diameter = impeller_diameter(head, speed, best_head_coefficient(nq) * rng.uniform(0.92, 1.05))
-    npsh3 = npsh3_of_suction_specific_speed(speed, flow, rng.uniform(7200.0, 10500.0) / 51.645)
+    diameter = diameter_for_head(head, speed, optimum_head_coefficient(nq) * rng.uniform(0.92, 1.05))
+    npsh3 = npsh3_from_suction_specific_speed(speed, flow, rng.uniform(7200.0, 10500.0) / 51.645)
     curve = _curve(rng, nq, flow, head, efficiency, npsh3, scatter, speed, round(diameter, 3))
     rated = round(rng.uniform(0.86, 1.04) * flow / M3H) * M3H
     duty_head = float(np.interp(rated, curve.head.flow, curve.head.value)) if curve.head is not None else head
