@@ -146,7 +146,14 @@ def _with_claims(at: AtFlow, bid: Bid) -> AtFlow:
         if values[column] is None and claim is not None:
             values[column] = claim.value
             filled.append(column)
-    return replace(at, **values, from_claims=tuple(filled))
+    return replace(
+        at,
+        head=values["head"],
+        efficiency=values["efficiency"],
+        power=values["power"],
+        npsh3=values["npsh3"],
+        from_claims=tuple(filled),
+    )
 
 
 def _operating(inquiry: Inquiry, bid: Bid, pumped: Fits | None) -> tuple[tuple[str, AtFlow], ...]:

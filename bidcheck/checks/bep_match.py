@@ -68,8 +68,8 @@ CHECK = Check(
         "": Wording(
             "Rated flow {rated_flow} is {ratio} of best efficiency flow {bep_flow} at the offered diameter.",
             "At the offered diameter your points put best efficiency at {bep_flow}, so rated flow {rated_flow} is"
-            " {ratio} of it. Please offer a selection within {limit}, or show by operating data why this one will run"
-            " well.",
+            " {ratio} of it. Please offer a selection within {limit} of it, or show by operating data why this one"
+            " will run well.",
         ),
         "inside the interval": Wording(
             "Rated flow {rated_flow} is {ratio} of fitted best efficiency flow {bep_flow}, but the points fix that"

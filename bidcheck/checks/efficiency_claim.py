@@ -79,7 +79,7 @@ def _above(estimate: EfficiencyEstimate, claim: float) -> tuple[str, Verdict, Li
     """Steps above the expected value."""
     top, attainable, remark = estimate.implausible_above, estimate.attainable, estimate.remark_above
     if top is not None:
-        origin = f"a quarter of the losses left above the {CHART}"
+        origin = f"a quarter of the way to 100 % beyond the {CHART}"
         limit = _limit("efficiency_implausible", None, top, origin, "derived")
         if not within(claim, limit).holds:
             return "implausible", Verdict.QUERY, limit

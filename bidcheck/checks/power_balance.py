@@ -13,8 +13,9 @@ import numpy as np
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, share, text
 from bidcheck.checks.request import asked, not_applicable
-from bidcheck.curve import Curve, Floats, Points
+from bidcheck.curve import Column, Curve, Floats, Points
 from bidcheck.explain import (
+    BALANCE,
     UNIT_MISTAKES,
     density_mistakes,
     frequency_mistakes,
@@ -53,7 +54,7 @@ def run(case: Case) -> Iterator[Measured]:
     yield from _single_points(case, *rows)
 
 
-def balanced_rows(curve: Curve, leave_out: set[tuple[str, int]]) -> tuple[Floats, Floats, Floats, Floats]:
+def balanced_rows(curve: Curve, leave_out: set[tuple[Column, int]]) -> tuple[Floats, Floats, Floats, Floats]:
     """Points where all four figures stand.
 
     Returns
@@ -63,7 +64,7 @@ def balanced_rows(curve: Curve, leave_out: set[tuple[str, int]]) -> tuple[Floats
     """
     columns = [points for points in (curve.head, curve.efficiency, curve.power) if points is not None]
     shared = sorted(set.intersection(*(set(points.line.tolist()) for points in columns)))
-    names = ("head", "efficiency", "power")
+    names: tuple[Column, ...] = ("head", "efficiency", "power")
     shared = [line for line in shared if not any((name, line) in leave_out for name in names)]
     H, eta, P = (_rows(points, shared) for points in columns)
     keep = (H[0] > 0) & (H[1] > 0) & (eta[1] > 0) & (P[1] > 0)
@@ -95,7 +96,7 @@ def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measur
         return Measured(subject="all points", verdict=Verdict.PASS, limit=limits.power_balance, evidence=evidence)
     mistakes = mistakes_that_close(
         middle,
-        {"flow": 1, "head": 1, "power": -1},
+        BALANCE,
         (
             *UNIT_MISTAKES,
             *stage_mistakes(bid.stages),
@@ -175,7 +176,7 @@ CHECK = Check(
             "Efficiency that follows from flow, head and power is only {followed_over_stated} of that stated. One"
             " mistake would close the gap: {mistakes}.",
             "Your head, power and efficiency disagree: ρgQH/P comes to {followed_over_stated} of the stated"
-            " efficiency. It would agree if {mistakes}. Please confirm and correct.",
+            " efficiency. It looks as if {mistakes}. Please confirm and correct.",
         ),
         "contradiction": Wording(
             "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, off by"

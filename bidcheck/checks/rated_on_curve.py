@@ -124,7 +124,7 @@ CHECK = Check(
         "explained": Wording(
             "Claimed {quantity} {claim} is off the bidder's own curve, {curve}, by {gap}. One mistake would close the"
             " gap: {mistakes}.",
-            "You claim {quantity} {claim} where your curve gives {curve}. They would agree if {mistakes}. Please"
+            "You claim {quantity} {claim} where your curve gives {curve}. It looks as if {mistakes}. Please"
             " confirm and correct.",
         ),
     },

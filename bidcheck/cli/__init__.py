@@ -1,58 +1,44 @@
-"""The command line, one file per command; the only user of click. Commands are loaded when they are asked for."""
+"""The command line, one file per command; the only user of click. Heavy modules are loaded inside the commands."""
 
 from importlib import import_module
-from typing import Any
 
 import click
 
 from bidcheck import __version__
-from bidcheck.cli.failures import UNREADABLE, survive_any_encoding, tell, tell_our_mistake
-from bidcheck.errors import BidcheckError
 
 COMMANDS = {
-    "evaluate": "bidcheck.cli.evaluate",
-    "curve": "bidcheck.cli.curve",
-    "checks": "bidcheck.cli.checks",
+    "evaluate": "evaluate the bids of an inquiry: the main job",
+    "curve": "look at one curve file, without an inquiry",
+    "checks": "list the checks, or explain one with its source and limits",
 }
-"""Name of each command → module with a function of that name."""
+"""Commands in the order of the help; each lives in the module of its name."""
 
 
 class Commands(click.Group):
-    """A group that loads its commands late and lets no traceback out."""
+    """A group that loads a command only when it is called."""
 
-    def list_commands(self, ctx: click.Context) -> list[str]:
-        """Names in the order of work."""
+    def list_commands(self, _ctx: click.Context) -> list[str]:
+        """Names in the order of the job."""
         return list(COMMANDS)
 
-    def get_command(self, ctx: click.Context, cmd_name: str) -> click.Command | None:
-        """Load one command."""
-        if cmd_name not in COMMANDS:
+    def get_command(self, _ctx: click.Context, name: str) -> click.Command | None:
+        """The command of a name."""
+        if name not in COMMANDS:
             return None
-        command: click.Command = getattr(import_module(COMMANDS[cmd_name]), cmd_name)
+        command: click.Command = import_module(f"bidcheck.cli.{name}_command").command
         return command
 
-    def invoke(self, ctx: click.Context) -> Any:
-        """Run a command; say what is wrong with inputs, or that the mistake is ours."""
-        survive_any_encoding()
-        try:
-            return super().invoke(ctx)
-        except (click.ClickException, click.exceptions.Exit, click.Abort, BrokenPipeError):
-            raise
-        except BidcheckError as error:
-            tell(error)
-            ctx.exit(UNREADABLE)
-        except Exception as error:
-            if ctx.params["trace"]:
-                raise
-            tell_our_mistake(error)
-            ctx.exit(UNREADABLE)
+    def format_commands(self, _ctx: click.Context, formatter: click.HelpFormatter) -> None:
+        """List the commands without loading them."""
+        with formatter.section("Commands"):
+            formatter.write_dl(list(COMMANDS.items()))
 
 
-@click.command(cls=Commands, context_settings={"help_option_names": ["-h", "--help"]})
+@click.command(cls=Commands, context_settings={"help_option_names": ["-h", "--help"], "max_content_width": 100})
 @click.version_option(__version__, prog_name="bidcheck")
-@click.option("--trace", is_flag=True, hidden=True, help="Let the traceback of an unexpected error through.")
-def main(trace: bool) -> None:  # noqa: ARG001
+def main() -> None:
     """Evaluate centrifugal-pump bids for one duty.
 
-    Exit codes: 0 done, 1 input cannot be read, 2 wrong usage, 3 something stands open that --fail-on asked for.
+    Puts the bids on one basis, holds each bid's figures against one another and against estimates that do not come
+    from the bidder, and writes down what stands against each bid and what to ask.
     """

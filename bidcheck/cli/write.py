@@ -1,39 +1,29 @@
-"""The only place that writes files: beside the target first, then put in its place at once."""
+"""Files out: written beside and renamed, so that a file is either the old one or the new one."""
 
+import contextlib
 import os
 import tempfile
 from pathlib import Path
 
 
 def write_atomically(path: Path, text: str) -> None:
-    """Write text in UTF-8 so that `path` holds either its former content or all of the new.
-
-    Parameters
-    ----------
-    path : Path
-        Its folder must exist.
-    text : str
-        Written as it is; line ends are not translated.
+    """Write text as UTF-8 with plain newlines; the folder must exist.
 
     Raises
     ------
     OSError
-        If the folder or the file cannot be written. Nothing is left behind.
+        If the folder cannot be written to; nothing is left behind.
     """
-    handle, name = tempfile.mkstemp(prefix=f".{path.name}.", suffix=".part", dir=path.parent)
+    handle, name = tempfile.mkstemp(dir=path.parent, prefix=f".{path.name}.", suffix=".part")
     beside = Path(name)
     try:
-        with os.fdopen(handle, "w", encoding="utf-8", newline="") as file:
-            file.write(text)
-        beside.chmod(_usual_mode())
+        with os.fdopen(handle, "w", encoding="utf-8", newline="\n") as stream:
+            stream.write(text)
+        mask = os.umask(0)
+        os.umask(mask)
+        beside.chmod(0o666 & ~mask)
         beside.replace(path)
     except BaseException:
-        beside.unlink(missing_ok=True)
+        with contextlib.suppress(OSError):
+            beside.unlink()
         raise
-
-
-def _usual_mode() -> int:
-    """Permissions of an ordinary new file; temporary files are readable by their owner alone."""
-    mask = os.umask(0)
-    os.umask(mask)
-    return 0o666 & ~mask

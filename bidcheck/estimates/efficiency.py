@@ -161,7 +161,7 @@ def estimate_efficiency(
     ...     arrangement="end suction", nq=27.85, nq_eye=27.85, flow=130 / 3600, head_per_stage=55.0, speed_rpm=2960
     ... )
     >>> round(estimate.expected, 4), round(estimate.attainable, 4)
-    (0.7785, 0.8497)
+    (0.7785, 0.85)
     """
     pump = Pump(arrangement, nq, nq_eye, flow, head_per_stage, speed_rpm, diameter, viscosity)
     market, guelich, chart = market_source(pump), guelich_source(pump), chart_source(pump)

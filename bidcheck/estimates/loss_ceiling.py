@@ -53,12 +53,13 @@ def disc_friction_coefficient(reynolds: float, gap_over_radius: float) -> float:
     if reynolds <= 0 or gap_over_radius <= 0:
         raise OutOfRange("disc friction needs positive Reynolds number and gap")
     s, Re = gap_over_radius, reynolds
-    return max(
+    regimes: tuple[float, ...] = (
         2.0 * math.pi / (s * Re),
         3.70 * s**0.1 / Re**0.5,
         0.080 / (s ** (1.0 / 6.0) * Re**0.25),
         0.102 * s**0.1 / Re**0.2,
     )
+    return max(regimes)
 
 
 def leakage_share(nq: float, seals: float = 1.0) -> float:

@@ -85,4 +85,5 @@ def npsh3_at_speed(npsh3: F, speed_rpm: float, new_speed_rpm: float, exponent: f
     >>> npsh3_at_speed(14.0, 3550, 1750, 1.5)
     4.85
     """
-    return npsh3 * (new_speed_rpm / speed_rpm) ** exponent
+    factor: float = (new_speed_rpm / speed_rpm) ** exponent
+    return npsh3 * factor
