@@ -1,10 +1,9 @@
 """`bidcheck checks`: the list of checks, or one explained."""
 
-from difflib import get_close_matches
-
 import click
 
-from bidcheck.cli.guarded import guarded
+from bidcheck.cli.failures import guarded
+from bidcheck.cli.plain import one_line
 
 
 @click.command("checks")
@@ -14,15 +13,17 @@ from bidcheck.cli.guarded import guarded
     "set_name",
     type=click.Choice(["general-water", "process"]),
     default="general-water",
+    show_default=True,
     help="Set of limits to show.",
 )
-@click.option("--units", type=click.Choice(["SI", "US"]), default="SI", help="Units to print.")
+@click.option("--units", type=click.Choice(["SI", "US"]), default="SI", show_default=True, help="Units to print.")
 @guarded
 def command(name: str | None, set_name: str, units: str) -> None:
     """List the checks, or explain the check NAME with its source and limits."""
     from bidcheck.checks import ALL
     from bidcheck.quantity import UnitSystem
-    from bidcheck.read.limit_sets import limit_set
+    from bidcheck.read import limit_set
+    from bidcheck.read.nearest import nearest
     from bidcheck.report.reference import check_text, checks_list
 
     if name is None:
@@ -31,7 +32,5 @@ def command(name: str | None, set_name: str, units: str) -> None:
         return
     by_name = {check.name: check for check in ALL}
     if name not in by_name:
-        near = get_close_matches(name, by_name, n=1)
-        hint = f'; nearest is "{near[0]}"' if near else "; bidcheck checks lists them"
-        raise click.UsageError(f'no check is called "{name}"{hint}')
-    click.echo(check_text(by_name[name], limit_set(set_name), UnitSystem[units.upper()]), nl=False)
+        raise click.UsageError(one_line(f'no check is called "{name}"; {nearest(name, by_name)}'))
+    click.echo(check_text(by_name[name], limit_set(set_name), UnitSystem(units)), nl=False)

@@ -7,6 +7,7 @@ from collections.abc import Iterable
 from rich.console import Console, ConsoleOptions, RenderableType
 from rich.segment import Segment
 
+from bidcheck.cli.failures import turn_away
 from bidcheck.cli.plain import plain
 
 PIPE_WIDTH = 120
@@ -21,6 +22,10 @@ class PlainConsole(Console):
         for segment in super().render(renderable, options):
             yield segment if segment.control else segment._replace(text=plain(segment.text))
 
+    def on_broken_pipe(self) -> None:
+        """Go on in silence when the reader has gone, so that files are written and the exit code holds."""
+        turn_away()
+
 
 def open_console() -> Console:
     """Console on standard output: in a pipe without colour, 120 wide unless COLUMNS says otherwise."""
@@ -33,6 +38,7 @@ def open_console() -> Console:
         markup=False,
         highlight=False,
         emoji=False,
+        legacy_windows=False,
     )
 
 

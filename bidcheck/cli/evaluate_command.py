@@ -2,11 +2,12 @@
 
 import sys
 from pathlib import Path
-from typing import TYPE_CHECKING
+from typing import TYPE_CHECKING, BinaryIO
 
 import click
 
-from bidcheck.cli.guarded import FINDINGS, READ_ERROR, complain, console, guarded, say
+from bidcheck.cli.failures import STANDS_OPEN, UNREADABLE, guarded, say, tell
+from bidcheck.cli.outputs import out_folders, refuse_bad_file, refuse_bad_folder, write_all, write_one
 from bidcheck.errors import BidcheckError
 
 if TYPE_CHECKING:
@@ -16,9 +17,14 @@ if TYPE_CHECKING:
 
 @click.command("evaluate")
 @click.argument("folders", nargs=-1, required=True, type=click.Path(path_type=Path), metavar="FOLDER...")
-@click.option("--out", type=click.Path(path_type=Path), metavar="DIR", help="Write report.html and evaluation.json.")
+@click.option(
+    "--out",
+    type=click.Path(path_type=Path),
+    metavar="DIR",
+    help="Write report.html and evaluation.json; of several folders, into DIR/<name of the folder>.",
+)
 @click.option("--json", "json_file", metavar="FILE", help="Write JSON to FILE; - prints it in place of the table.")
-@click.option("--units", type=click.Choice(["SI", "US"]), help="Units to print.")
+@click.option("--units", type=click.Choice(["SI", "US"]), help="Units to print; else those the inquiry names.")
 @click.option("--skip-unreadable", is_flag=True, help="Leave out bids that cannot be read, and say so.")
 @click.option(
     "--fail-on",
@@ -37,86 +43,90 @@ def command(  # noqa: PLR0917
     """Evaluate the bids of each inquiry FOLDER.
 
     Prints one table of the bids and then what stands against each, with its limit, where the limit comes from and the
-    question to send. Nothing is written into FOLDER.
+    question to send. Nothing is written into FOLDER unless asked for.
 
     Exit codes: 0 done, 1 an input cannot be read, 2 wrong usage, 3 only with --fail-on.
     """
-    if json_file is not None and len(folders) > 1:
-        raise click.UsageError("--json takes one folder")
-    _refuse_output_among_bids(folders, out)
+    _refuse_bad_outputs(folders, out, json_file)
     from bidcheck.line import evaluate
     from bidcheck.read import read_inquiry
 
-    unread, met = False, False
-    for number, folder in enumerate(folders):
-        if len(folders) > 1 and sys.stderr.isatty():
-            click.echo(f"{number + 1} of {len(folders)}: {folder}", err=True)
+    targets = out_folders(out, folders) if out is not None else (None,) * len(folders)
+    unread = open_finding = False
+    for number, (folder, target) in enumerate(zip(folders, targets, strict=True)):
         try:
             evaluation = evaluate(read_inquiry(folder, skip_unreadable=skip_unreadable))
         except BidcheckError as error:
-            complain(error)
+            tell(error, str(folder) if len(folders) > 1 else "")
             unread = True
             continue
-        target = None if out is None else out / folder.resolve().name if len(folders) > 1 else out
-        _give(evaluation, target, json_file, _system(units, evaluation), more=number > 0)
-        met = met or _meets(evaluation, fail_on)
-    if unread:
-        raise click.exceptions.Exit(READ_ERROR)
-    if met:
-        raise click.exceptions.Exit(FINDINGS)
+        _print(evaluation, as_json=json_file == "-", system=_system(units, evaluation), after_another=number > 0)
+        _write(evaluation, target, json_file, _system(units, evaluation))
+        open_finding = open_finding or _stands_open(evaluation, fail_on)
+    if unread or open_finding:
+        raise click.exceptions.Exit(UNREADABLE if unread else STANDS_OPEN)
 
 
-def _refuse_output_among_bids(folders: tuple[Path, ...], out: Path | None) -> None:
-    """Refuse an output folder that is a file or lies among the bids."""
-    if out is None:
-        return
-    if out.exists() and not out.is_dir():
-        raise click.UsageError(f"--out {out}: is a file; name a folder")
-    for folder in folders:
-        if out.resolve().is_relative_to((folder / "bids").resolve()):
-            raise click.UsageError(f"--out {out}: lies among the bids; name a folder elsewhere")
+def _refuse_bad_outputs(folders: tuple[Path, ...], out: Path | None, json_file: str | None) -> None:
+    """Refuse places where nothing should be written, before any work is done."""
+    if json_file is not None and len(folders) > 1:
+        raise click.UsageError("--json takes one folder")
+    if out is not None:
+        refuse_bad_folder(out, folders)
+    if json_file not in (None, "-"):
+        refuse_bad_file("--json", Path(str(json_file)), folders)
 
 
 def _system(units: str | None, evaluation: "Evaluation") -> "UnitSystem":
     """Units asked for, else those of the inquiry."""
     from bidcheck.quantity import UnitSystem
 
-    return evaluation.inquiry.units if units is None else UnitSystem[units.upper()]
+    return evaluation.inquiry.units if units is None else UnitSystem(units)
 
 
-def _give(
-    evaluation: "Evaluation", out: Path | None, json_file: str | None, system: "UnitSystem", *, more: bool
-) -> None:
-    """Print the table or the JSON, and write the files asked for."""
-    from bidcheck.cli.write import write_atomically
+def _print(evaluation: "Evaluation", *, as_json: bool, system: "UnitSystem", after_another: bool) -> None:
+    """Print the table, or the JSON in its place."""
+    if as_json:
+        from bidcheck.report.json_text import evaluation_json
+
+        stream: BinaryIO = click.get_binary_stream("stdout")
+        stream.write(evaluation_json(evaluation).encode("utf-8"))
+        stream.flush()
+        return
+    from bidcheck.cli.console import open_console
+    from bidcheck.report.terminal import print_evaluation
+
+    console = open_console()
+    if after_another:
+        console.print()
+    print_evaluation(evaluation, console, system)
+    sys.stdout.flush()
+
+
+def _write(evaluation: "Evaluation", out: Path | None, json_file: str | None, system: "UnitSystem") -> None:
+    """Write the files asked for; every text is complete before the first is written."""
+    if out is None and json_file in (None, "-"):
+        return
     from bidcheck.report.json_text import evaluation_json
 
-    if json_file == "-":
-        sys.stdout.reconfigure(encoding="utf-8", newline="\n")  # type: ignore[union-attr]
-        click.echo(evaluation_json(evaluation), nl=False)
-    else:
-        from bidcheck.report.terminal import print_evaluation
-
-        screen = console()
-        if more:
-            screen.print()
-        print_evaluation(evaluation, screen, system)
+    document = evaluation_json(evaluation)
     if json_file not in (None, "-"):
-        write_atomically(Path(json_file), evaluation_json(evaluation))
+        write_one(Path(str(json_file)), document)
     if out is not None:
         from bidcheck.report.page import evaluation_page
 
-        out.mkdir(parents=True, exist_ok=True)
-        write_atomically(out / "report.html", evaluation_page(evaluation, system=system))
-        write_atomically(out / "evaluation.json", evaluation_json(evaluation))
+        page = evaluation_page(evaluation, system=system)
+        write_all(out, {"report.html": page, "evaluation.json": document})
         say(f"written: {out / 'report.html'}, {out / 'evaluation.json'}")
 
 
-def _meets(evaluation: "Evaluation", fail_on: str | None) -> bool:
-    """Whether an open finding of the verdict asked for, or a graver one, stands."""
+def _stands_open(evaluation: "Evaluation", fail_on: str | None) -> bool:
+    """Whether an open finding of the verdict asked for, or a graver one, stands against any bid."""
+    from bidcheck.finding import Verdict
+
     if fail_on is None:
         return False
-    verdicts = ("fail",) if fail_on == "fail" else ("fail", "query")
+    verdicts = (Verdict.FAIL,) if fail_on == "fail" else (Verdict.FAIL, Verdict.QUERY)
     return any(
         finding.verdict in verdicts and finding.accepted is None for bid in evaluation.bids for finding in bid.findings
     )
