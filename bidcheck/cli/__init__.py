@@ -28,6 +28,17 @@ class Commands(click.Group):
         command: click.Command = import_module(f"bidcheck.cli.{name}_command").command
         return command
 
+    def resolve_command(
+        self, ctx: click.Context, args: list[str]
+    ) -> tuple[str | None, click.Command | None, list[str]]:
+        """The command called; one that does not exist is refused with the nearest there is."""
+        if args[0] not in COMMANDS and not args[0].startswith("-"):
+            from difflib import get_close_matches
+
+            near = get_close_matches(args[0], COMMANDS, n=1)
+            ctx.fail(f"no command is called {args[0]!r}; " + (f'nearest is "{near[0]}"' if near else "see --help"))
+        return super().resolve_command(ctx, args)
+
     def format_commands(self, _ctx: click.Context, formatter: click.HelpFormatter) -> None:
         """List the commands without loading them."""
         with formatter.section("Commands"):
@@ -36,8 +47,7 @@ class Commands(click.Group):
 
 @click.command(cls=Commands, context_settings={"help_option_names": ["-h", "--help"], "max_content_width": 100})
 @click.version_option(__version__, prog_name="bidcheck")
-@click.option("--trace", is_flag=True, hidden=True, help="Let the traceback of an unexpected error through.")
-def main(trace: bool) -> None:
+def main() -> None:
     """Evaluate centrifugal-pump bids for one duty.
 
     Puts the bids on one basis, holds each bid's figures against one another and against estimates that do not come

@@ -1,18 +1,21 @@
 """`bidcheck evaluate`: the main job."""
 
+import io
 import sys
 from pathlib import Path
-from typing import TYPE_CHECKING, BinaryIO
+from typing import TYPE_CHECKING
 
 import click
 
-from bidcheck.cli.failures import STANDS_OPEN, UNREADABLE, guarded, say, tell
-from bidcheck.cli.outputs import out_folders, refuse_bad_file, refuse_bad_folder, write_all, write_one
+from bidcheck.cli.guarded import FINDINGS, READ_ERROR, complain, emit, guarded, say, wrong_usage
+from bidcheck.cli.targets import folders_out, refuse_file
 from bidcheck.errors import BidcheckError
 
 if TYPE_CHECKING:
     from bidcheck.evaluation import Evaluation
     from bidcheck.quantity import UnitSystem
+
+STANDARD_OUTPUT = "-"
 
 
 @click.command("evaluate")
@@ -21,10 +24,10 @@ if TYPE_CHECKING:
     "--out",
     type=click.Path(path_type=Path),
     metavar="DIR",
-    help="Write report.html and evaluation.json; of several folders, into DIR/<name of the folder>.",
+    help="Write report.html and evaluation.json into DIR; with several folders into a folder of each one's name in it.",
 )
 @click.option("--json", "json_file", metavar="FILE", help="Write JSON to FILE; - prints it in place of the table.")
-@click.option("--units", type=click.Choice(["SI", "US"]), help="Units to print; else those the inquiry names.")
+@click.option("--units", type=click.Choice(["SI", "US"]), help="Units to print; those of the inquiry if not given.")
 @click.option("--skip-unreadable", is_flag=True, help="Leave out bids that cannot be read, and say so.")
 @click.option(
     "--fail-on",
@@ -43,38 +46,34 @@ def command(  # noqa: PLR0917
     """Evaluate the bids of each inquiry FOLDER.
 
     Prints one table of the bids and then what stands against each, with its limit, where the limit comes from and the
-    question to send. Nothing is written into FOLDER unless asked for.
+    question to send. Nothing is written into FOLDER.
 
     Exit codes: 0 done, 1 an input cannot be read, 2 wrong usage, 3 only with --fail-on.
     """
-    _refuse_bad_outputs(folders, out, json_file)
+    if json_file is not None and len(folders) > 1:
+        raise wrong_usage("--json takes one folder")
+    if json_file not in (None, STANDARD_OUTPUT):
+        refuse_file("--json", Path(json_file), folders)
+    targets = {} if out is None else folders_out(out, folders)
     from bidcheck.line import evaluate
     from bidcheck.read import read_inquiry
 
-    targets = out_folders(out, folders) if out is not None else (None,) * len(folders)
-    unread = open_finding = False
-    for number, (folder, target) in enumerate(zip(folders, targets, strict=True)):
+    several, unread, met = len(folders) > 1, False, False
+    for number, folder in enumerate(folders):
+        if several and sys.stderr.isatty():
+            say(f"{number + 1} of {len(folders)}: {folder}")
         try:
             evaluation = evaluate(read_inquiry(folder, skip_unreadable=skip_unreadable))
         except BidcheckError as error:
-            tell(error, str(folder) if len(folders) > 1 else "")
+            complain(error, folder if several else None)
             unread = True
             continue
-        _print(evaluation, as_json=json_file == "-", system=_system(units, evaluation), after_another=number > 0)
-        _write(evaluation, target, json_file, _system(units, evaluation))
-        open_finding = open_finding or _stands_open(evaluation, fail_on)
-    if unread or open_finding:
-        raise click.exceptions.Exit(UNREADABLE if unread else STANDS_OPEN)
-
-
-def _refuse_bad_outputs(folders: tuple[Path, ...], out: Path | None, json_file: str | None) -> None:
-    """Refuse places where nothing should be written, before any work is done."""
-    if json_file is not None and len(folders) > 1:
-        raise click.UsageError("--json takes one folder")
-    if out is not None:
-        refuse_bad_folder(out, folders)
-    if json_file not in (None, "-"):
-        refuse_bad_file("--json", Path(str(json_file)), folders)
+        system = _system(units, evaluation)
+        _write(evaluation, targets.get(folder), json_file, system)
+        _print(evaluation, json_file, system, more=number > 0)
+        met = met or _meets(evaluation, fail_on)
+    if unread or met:
+        raise click.exceptions.Exit(READ_ERROR if unread else FINDINGS)
 
 
 def _system(units: str | None, evaluation: "Evaluation") -> "UnitSystem":
@@ -84,49 +83,49 @@ def _system(units: str | None, evaluation: "Evaluation") -> "UnitSystem":
     return evaluation.inquiry.units if units is None else UnitSystem(units)
 
 
-def _print(evaluation: "Evaluation", *, as_json: bool, system: "UnitSystem", after_another: bool) -> None:
-    """Print the table, or the JSON in its place."""
-    if as_json:
+def _write(evaluation: "Evaluation", out: Path | None, json_file: str | None, system: "UnitSystem") -> None:
+    """Write the files asked for, once the text of every one is ready."""
+    files: dict[Path, str] = {}
+    if json_file not in (None, STANDARD_OUTPUT):
         from bidcheck.report.json_text import evaluation_json
 
-        stream: BinaryIO = click.get_binary_stream("stdout")
-        stream.write(evaluation_json(evaluation).encode("utf-8"))
-        stream.flush()
-        return
-    from bidcheck.cli.console import open_console
-    from bidcheck.report.terminal import print_evaluation
-
-    console = open_console()
-    if after_another:
-        console.print()
-    print_evaluation(evaluation, console, system)
-    sys.stdout.flush()
-
-
-def _write(evaluation: "Evaluation", out: Path | None, json_file: str | None, system: "UnitSystem") -> None:
-    """Write the files asked for; every text is complete before the first is written."""
-    if out is None and json_file in (None, "-"):
-        return
-    from bidcheck.report.json_text import evaluation_json
-
-    document = evaluation_json(evaluation)
-    if json_file not in (None, "-"):
-        write_one(Path(str(json_file)), document)
+        files[Path(json_file)] = evaluation_json(evaluation)
     if out is not None:
+        from bidcheck.report.json_text import evaluation_json
         from bidcheck.report.page import evaluation_page
 
-        page = evaluation_page(evaluation, system=system)
-        write_all(out, {"report.html": page, "evaluation.json": document})
-        say(f"written: {out / 'report.html'}, {out / 'evaluation.json'}")
+        files[out / "report.html"] = evaluation_page(evaluation, system=system)
+        files[out / "evaluation.json"] = evaluation_json(evaluation)
+        out.mkdir(parents=True, exist_ok=True)
+    if files:
+        from bidcheck.cli.write import write_atomically
+
+        for path, text in files.items():
+            write_atomically(path, text)
+        say(f"written: {', '.join(map(str, files))}")
 
 
-def _stands_open(evaluation: "Evaluation", fail_on: str | None) -> bool:
-    """Whether an open finding of the verdict asked for, or a graver one, stands against any bid."""
-    from bidcheck.finding import Verdict
+def _print(evaluation: "Evaluation", json_file: str | None, system: "UnitSystem", *, more: bool) -> None:
+    """Print the table, or the JSON in place of it."""
+    if json_file == STANDARD_OUTPUT:
+        from bidcheck.report.json_text import evaluation_json
 
-    if fail_on is None:
-        return False
-    verdicts = (Verdict.FAIL,) if fail_on == "fail" else (Verdict.FAIL, Verdict.QUERY)
+        if isinstance(sys.stdout, io.TextIOWrapper):
+            sys.stdout.reconfigure(encoding="utf-8", newline="\n")
+        emit(evaluation_json(evaluation))
+        return
+    from bidcheck.cli.screen import screen
+    from bidcheck.report.terminal import print_evaluation
+
+    console = screen()
+    if more:
+        console.print()
+    print_evaluation(evaluation, console, system)
+
+
+def _meets(evaluation: "Evaluation", fail_on: str | None) -> bool:
+    """Whether an open finding of the verdict asked for, or a graver one, stands."""
+    verdicts = {None: (), "fail": ("fail",), "query": ("fail", "query")}[fail_on]
     return any(
         finding.verdict in verdicts and finding.accepted is None for bid in evaluation.bids for finding in bid.findings
     )

@@ -9,21 +9,43 @@ from pathlib import Path
 def write_atomically(path: Path, text: str) -> None:
     """Write text as UTF-8 with plain newlines; the folder must exist.
 
+    A file that is there already keeps its permissions; a link is followed; a device is written to, not replaced.
+
     Raises
     ------
     OSError
-        If the folder cannot be written to; nothing is left behind.
+        Naming `path`, if it cannot be written; nothing is left behind.
     """
-    handle, name = tempfile.mkstemp(dir=path.parent, prefix=f".{path.name}.", suffix=".part")
+    target = Path(os.path.realpath(path))
+    try:
+        if target.exists() and not target.is_file():
+            target.write_text(text, encoding="utf-8", newline="\n")
+        else:
+            _replace(target, text)
+    except OSError as error:
+        raise OSError(error.errno, error.strerror, str(path)) from error
+
+
+def _replace(target: Path, text: str) -> None:
+    """Write a new file beside `target` and give it its name."""
+    mode = _mode(target)
+    handle, name = tempfile.mkstemp(dir=target.parent, prefix=".bidcheck-", suffix=".part")
     beside = Path(name)
     try:
         with os.fdopen(handle, "w", encoding="utf-8", newline="\n") as stream:
             stream.write(text)
-        mask = os.umask(0)
-        os.umask(mask)
-        beside.chmod(0o666 & ~mask)
-        beside.replace(path)
+        beside.chmod(mode)
+        beside.replace(target)
     except BaseException:
         with contextlib.suppress(OSError):
             beside.unlink()
         raise
+
+
+def _mode(target: Path) -> int:
+    """Permissions of the file that is there, else those of any new file."""
+    if target.exists():
+        return target.stat().st_mode & 0o777
+    mask = os.umask(0)
+    os.umask(mask)
+    return 0o666 & ~mask
