@@ -43,6 +43,7 @@ def command(file: Path, units: str, speed: str | None, stages: int, picture: Pat
 
         write_atomically(picture, curve_figure(fits, curve, system))
     print_curve(fits, curve, console, system)
+    console.print()
     if speed_rpm is None:
         console.print("specific speeds are left out: the file names no speed, give --speed")
     else:

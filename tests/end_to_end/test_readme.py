@@ -1,7 +1,9 @@
-"""README's commands are whole, and what it shows is what the program prints."""
+"""README's commands are whole, and what it and the guide show is what the program prints."""
 
 import re
 from pathlib import Path
+
+import pytest
 
 from tests.end_to_end.command import run
 
@@ -12,16 +14,20 @@ SHOWN = re.compile(
 
 
 def with_output(text: str) -> str:
-    """README with the output of the command it names put between its markers."""
-    match = SHOWN.search(text)
-    assert match is not None, "README has lost the markers of its output"
-    done = run(*match["arguments"].split(), cwd=README.parent)
-    assert done.returncode == 0, done.stderr
-    return text[: match.start("output")] + done.stdout + text[match.end("output") :]
+    """A document with the output of each command it names put between its markers."""
+
+    def shown_anew(match: re.Match[str]) -> str:
+        done = run(*match["arguments"].split(), cwd=README.parent)
+        assert done.returncode == 0, done.stderr
+        return match[1] + done.stdout + match[4]
+
+    assert SHOWN.search(text) is not None, "the markers of the output are lost"
+    return SHOWN.sub(shown_anew, text)
 
 
-def test_output_is_current(golden):
-    golden("README.md", with_output(README.read_text(encoding="utf-8")))
+@pytest.mark.parametrize("document", ["README.md", "docs/guide.md"])
+def test_output_is_current(golden, document):
+    golden(document, with_output((README.parent / document).read_text(encoding="utf-8")))
 
 
 def test_output_shows_every_example_bid():
