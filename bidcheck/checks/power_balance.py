@@ -26,7 +26,7 @@ from bidcheck.explain import (
     stage_mistakes,
 )
 from bidcheck.finding import Check, Measured, Verdict, Wording
-from bidcheck.hydraulics.power_balance import balance_tolerance, efficiency_from_power
+from bidcheck.hydraulics.power_balance import efficiency_from_power, printed_digits_tolerance
 from bidcheck.limits import within
 
 DIGITS_AND = 0.005
@@ -68,10 +68,28 @@ def balanced_rows(curve: Curve, leave_out: set[tuple[Column, int]]) -> tuple[Flo
     shared = [line for line in shared if not any((name, line) in leave_out for name in names)]
     H, eta, P = (_rows(points, shared) for points in columns)
     keep = (H[0] > 0) & (H[1] > 0) & (eta[1] > 0) & (P[1] > 0)
-    Q, H1, eta1, P1 = H[0][keep], H[1][keep], eta[1][keep], P[1][keep]
-    gap = efficiency_from_power(curve.density, Q, H1, P1) / eta1
-    tolerance = balance_tolerance(H[2][keep] / Q, H[3][keep] / H1, eta[3][keep] / eta1, P[3][keep] / P1)
-    return np.array(shared, dtype=float)[keep], Q, np.asarray(gap), np.asarray(tolerance) + DIGITS_AND
+    rows = [
+        _balance(curve.density, *figures)
+        for figures in zip(
+            zip(H[0][keep].tolist(), H[2][keep].tolist(), strict=True),
+            zip(H[1][keep].tolist(), H[3][keep].tolist(), strict=True),
+            zip(eta[1][keep].tolist(), eta[3][keep].tolist(), strict=True),
+            zip(P[1][keep].tolist(), P[3][keep].tolist(), strict=True),
+            strict=True,
+        )
+    ]
+    gap, tolerance = np.array([row[0] for row in rows]), np.array([row[1] for row in rows])
+    return np.array(shared, dtype=float)[keep], H[0][keep], gap, tolerance + DIGITS_AND
+
+
+Printed = tuple[float, float]
+"""A figure and half a unit in its last printed place."""
+
+
+def _balance(density: float, flow: Printed, head: Printed, efficiency: Printed, power: Printed) -> Printed:
+    """Gap and tolerance of one point."""
+    gap = efficiency_from_power(density, flow[0], head[0], power[0]) / efficiency[0]
+    return gap, printed_digits_tolerance(flow=flow, head=head, power=power, efficiency=efficiency)
 
 
 def _rows(points: Points, lines: list[int]) -> tuple[Floats, Floats, Floats, Floats]:

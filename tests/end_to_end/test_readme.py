@@ -1,52 +1,52 @@
-"""README's commands are whole, and what it and the guide show is what the program prints."""
+"""The two commands of README stand on one line each, are what CI runs, and its Python examples run."""
 
 import re
-from pathlib import Path
+import subprocess
+import sys
 
 import pytest
 
-from tests.end_to_end.command import run
-
-README = Path(__file__).parents[2] / "README.md"
-SHOWN = re.compile(
-    r"(<!-- output: bidcheck (?P<arguments>[^\n]+) -->\n```\n)(?P<output>.*?)(```\n<!-- end of output -->)", re.S
-)
+from tests.golden_files import ROOT
+from tests.shown_output import arguments, command_named
 
 
-def with_output(text: str) -> str:
-    """A document with the output of each command it names put between its markers."""
+@pytest.fixture
+def readme():
+    return (ROOT / "README.md").read_text(encoding="utf-8")
 
-    def shown_anew(match: re.Match[str]) -> str:
-        done = run(*match["arguments"].split(), cwd=README.parent)
+
+def test_main_job_installs_and_evaluates_an_example(readme):
+    line = command_named(readme, "main job")
+    assert "pip install" in line
+    command, folder = arguments(line)
+    assert command == "evaluate"
+    assert (ROOT / folder / "inquiry.toml").is_file()
+
+
+def test_the_output_shown_is_that_of_the_main_job(readme):
+    line = command_named(readme, "main job")
+    assert f"```bash\n{line}\n```\n\n<!-- output of the command above -->\n\n```text\n" in readme
+
+
+def test_tests_are_installed_and_run(readme):
+    line = command_named(readme, "tests")
+    assert "'.[test]'" in line
+    assert line.endswith("-m pytest -q")
+
+
+def test_ci_takes_its_command_from_readme(readme):
+    script = (ROOT / ".ci" / "run").read_text(encoding="utf-8")
+    assert "README.md" in script
+    assert "pytest -q" not in script.replace("pytest -q tests/browser", "")
+    found = re.search(r"^tests_command=\$\((.*)\)$", script, re.MULTILINE)
+    assert found is not None
+    done = subprocess.run(["bash", "-c", found[1]], capture_output=True, text=True, cwd=ROOT, check=True)
+    assert done.stdout.strip() == command_named(readme, "tests")
+
+
+def test_python_examples_run(readme):
+    examples = re.findall(r"```python\n(.*?)```\n", readme, re.DOTALL)
+    assert examples
+    for example in examples:
+        done = subprocess.run([sys.executable, "-c", example], capture_output=True, text=True, cwd=ROOT, check=False)
         assert done.returncode == 0, done.stderr
-        return match[1] + done.stdout + match[4]
-
-    assert SHOWN.search(text) is not None, "the markers of the output are lost"
-    return SHOWN.sub(shown_anew, text)
-
-
-@pytest.mark.parametrize("document", ["README.md", "docs/guide.md"])
-def test_output_is_current(golden, document):
-    golden(document, with_output((README.parent / document).read_text(encoding="utf-8")))
-
-
-def test_output_shows_every_example_bid():
-    match = SHOWN.search(README.read_text(encoding="utf-8"))
-    assert match is not None
-    assert all(name in match["output"] for name in ("alder", "birch", "cedar", "dogwood", "elm"))
-
-
-def test_each_command_stands_on_one_line():
-    blocks = re.findall(r"^```\n(python3 .*?)^```$", README.read_text(encoding="utf-8"), re.S | re.M)
-    assert len(blocks) == 2
-    for block, end in zip(
-        blocks, ("bidcheck evaluate example_bids/cooling_water\n", "python -m pytest -q\n"), strict=True
-    ):
-        assert block.count("\n") == 1
-        assert block.endswith(end)
-        assert block.startswith("python3 -m venv .venv && .venv/bin/pip install -q ")
-
-
-def test_every_file_it_points_to_is_there():
-    for target in re.findall(r"\]\(([^)]+)\)", README.read_text(encoding="utf-8")):
-        assert (README.parent / target).exists(), target

@@ -26,8 +26,8 @@ def test_methods_name_their_source_and_mark():
     page = methods_page()
     for name in (
         "market_efficiency",
-        "single_stage_efficiency",
-        "attainable_efficiency",
+        "guelich_single_stage",
+        "chart_efficiency",
         "npsh_available",
         "specific_speed",
     ):
