@@ -6,7 +6,7 @@ from pathlib import Path
 
 ORDER: tuple[tuple[str, ...], ...] = (
     ("errors", "quantity", "numerals", "unit_table", "unit_refusals", "units"),
-    ("curve", "limits", "bid", "inquiry", "case", "finding", "evaluation"),
+    ("arrangement", "curve", "limits", "bid", "inquiry", "case", "finding", "evaluation"),
     ("hydraulics",),
     ("estimates", "fit", "guarantee", "explain"),
     ("basis",),

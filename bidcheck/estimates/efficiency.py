@@ -8,7 +8,7 @@ looks at the specific speed of total flow and keeps the more generous.
 import math
 from typing import NamedTuple
 
-from bidcheck.bid import Arrangement
+from bidcheck.arrangement import Arrangement
 from bidcheck.case import EfficiencyEstimate
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates.expected import MULTISTAGE, expected_efficiency

@@ -10,7 +10,7 @@ only from 22.5 m³/h: c may be absent, but never steps from one source to the ot
 import math
 from typing import NamedTuple
 
-from bidcheck.bid import Arrangement
+from bidcheck.arrangement import Arrangement
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates import guelich, market_surface
 from bidcheck.estimates.market_surface import (

@@ -2,7 +2,7 @@
 
 from dataclasses import dataclass
 
-from bidcheck.bid import Arrangement
+from bidcheck.arrangement import Arrangement
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates import guelich
 from bidcheck.estimates.attainable import chart_efficiency

@@ -2,7 +2,7 @@
 
 from collections.abc import Callable, Mapping
 
-from bidcheck.bid import Arrangement
+from bidcheck.arrangement import Arrangement
 from bidcheck.case import Source
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates import context, guelich

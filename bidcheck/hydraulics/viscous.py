@@ -4,12 +4,14 @@ import math
 from typing import NamedTuple
 
 import numpy as np
+import numpy.typing as npt
 
-from bidcheck.curve import Floats
 from bidcheck.errors import OutOfRange
 from bidcheck.hydraulics.power_balance import hydraulic_power
 from bidcheck.hydraulics.ranges import require_inside, require_positive
 from bidcheck.hydraulics.specific_speed import specific_speed
+
+Floats = npt.NDArray[np.float64]
 
 
 class ViscousFactors(NamedTuple):

@@ -4,7 +4,7 @@ import math
 
 import pytest
 
-from bidcheck.bid import ARRANGEMENTS
+from bidcheck.arrangement import ARRANGEMENTS
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates.efficiency import claim_thresholds, estimate_efficiency, is_lenient
 

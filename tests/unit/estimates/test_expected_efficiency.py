@@ -4,7 +4,7 @@ import math
 
 import pytest
 
-from bidcheck.bid import ARRANGEMENTS
+from bidcheck.arrangement import ARRANGEMENTS
 from bidcheck.estimates.expected import expected_efficiency, market_classes, survey_weight
 from bidcheck.estimates.market_surface import ESOB_1450, ESOB_2900, MSS_2900, MSV_2900
 
