@@ -32,7 +32,8 @@ STANDARD_OUTPUT = "-"
 @click.option(
     "--fail-on",
     type=click.Choice(["query", "fail"]),
-    help="Exit with 3 if an open finding of this verdict or a graver one stands against a bid; an incomplete bid counts as query.",
+    help="Exit with 3 if an open finding of this verdict or a graver one stands against a bid; an incomplete bid counts"
+    " as a query.",
 )
 @guarded
 def command(  # noqa: PLR0917
