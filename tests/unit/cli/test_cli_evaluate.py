@@ -58,6 +58,12 @@ def test_fail_on(fakes, fail_on, verdict, accepted, code):
     assert invoke("evaluate", "one", *option).exit_code == code
 
 
+@pytest.mark.parametrize(("fail_on", "code"), [("query", 3), ("fail", 0)])
+def test_an_incomplete_bid_counts_as_a_query(fakes, fail_on, code):
+    fakes.read["one"] = evaluation(finding("no-data", decisive=True))
+    assert invoke("evaluate", "one", "--fail-on", fail_on).exit_code == code
+
+
 def test_every_problem_on_a_line_of_standard_error(fakes):
     fakes.read["one"] = InputError(
         [Problem("bids/elm/bid.toml", "first", 2), Problem("bids/elm/curve.csv", "second", 9, 4)]
