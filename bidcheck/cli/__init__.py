@@ -47,7 +47,8 @@ class Commands(click.Group):
 
 @click.command(cls=Commands, context_settings={"help_option_names": ["-h", "--help"], "max_content_width": 100})
 @click.version_option(__version__, prog_name="bidcheck")
-def main() -> None:
+@click.option("--trace", is_flag=True, hidden=True, help="Let the traceback of an unexpected error through.")
+def main(trace: bool) -> None:
     """Evaluate centrifugal-pump bids for one duty.
 
     Puts the bids on one basis, holds each bid's figures against one another and against estimates that do not come

@@ -43,7 +43,10 @@ def command(file: Path, units: str, speed: str | None, stages: int, picture: Pat
 
         write_atomically(picture, curve_figure(fits, curve, system))
     print_curve(fits, curve, console, system)
-    if speed_rpm is not None:
+    console.print()
+    if speed_rpm is None:
+        console.print("specific speeds are left out: the file names no speed, give --speed")
+    else:
         for line in specific_speed_lines(fits, speed_rpm, stages, system):
             console.print(line)
 

@@ -32,7 +32,8 @@ STANDARD_OUTPUT = "-"
 @click.option(
     "--fail-on",
     type=click.Choice(["query", "fail"]),
-    help="Exit with 3 if an open finding of this verdict or a graver one stands against a bid.",
+    help="Exit with 3 if an open finding of this verdict or a graver one stands against a bid; an incomplete bid counts"
+    " as a query.",
 )
 @guarded
 def command(  # noqa: PLR0917
@@ -124,8 +125,13 @@ def _print(evaluation: "Evaluation", json_file: str | None, system: "UnitSystem"
 
 
 def _meets(evaluation: "Evaluation", fail_on: str | None) -> bool:
-    """Whether an open finding of the verdict asked for, or a graver one, stands."""
-    verdicts = {None: (), "fail": ("fail",), "query": ("fail", "query")}[fail_on]
+    """Whether something as grave as asked for is open; missing data that makes a bid incomplete counts as a query."""
+    if fail_on is None:
+        return False
+    verdicts = ("fail",) if fail_on == "fail" else ("fail", "query")
     return any(
-        finding.verdict in verdicts and finding.accepted is None for bid in evaluation.bids for finding in bid.findings
+        (finding.verdict in verdicts or (fail_on == "query" and finding.verdict == "no-data" and finding.decisive))
+        and finding.accepted is None
+        for bid in evaluation.bids
+        for finding in bid.findings
     )

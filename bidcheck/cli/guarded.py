@@ -37,7 +37,10 @@ def guarded(command: Callable[P, R]) -> Callable[P, R]:
         except OSError as error:
             say(f"{error.filename or 'file'}: {error.strerror or error}")
         except Exception as error:
-            say(f"this is a mistake in bidcheck, please report it with the files that show it: {_in_one_line(error)}")
+            if click.get_current_context().find_root().params.get("trace"):
+                raise
+            say("this is a mistake in bidcheck, not in your files; please report it with the files that show it")
+            say(_in_one_line(error))
         raise click.exceptions.Exit(READ_ERROR)
 
     return run

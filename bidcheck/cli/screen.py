@@ -21,7 +21,7 @@ class Screen(Console):
 
 
 def screen() -> Screen:
-    """Standard output as a console; NO_COLOR and COLUMNS are respected."""
+    """Standard output as a console; NO_COLOR, COLUMNS and FORCE_COLOR are respected."""
     keep_readable(sys.stdout)
     width = None if sys.stdout.isatty() or "COLUMNS" in os.environ else PIPE_WIDTH
     return Screen(file=sys.stdout, width=width, highlight=False, markup=False, emoji=False, legacy_windows=False)

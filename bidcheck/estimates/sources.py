@@ -40,6 +40,8 @@ def _source(
         found = value()
     except OutOfRange as error:
         return Source(name, None, valid, str(error), mark, origin)
+    if not 0.0 < found < 1.0:
+        return Source(name, None, valid, "gives no efficiency at this flow and specific speed", mark, origin)
     return Source(name, found, valid, "", mark, origin, None if share is None else share * (1.0 - found))
 
 

@@ -11,8 +11,8 @@ from bidcheck.cli import main
 from bidcheck.quantity import UnitSystem
 
 
-def finding(verdict: str, accepted: str | None = None) -> SimpleNamespace:
-    return SimpleNamespace(verdict=verdict, accepted=accepted)
+def finding(verdict: str, accepted: str | None = None, decisive: bool = False) -> SimpleNamespace:
+    return SimpleNamespace(verdict=verdict, accepted=accepted, decisive=decisive)
 
 
 def evaluation(*findings: SimpleNamespace, units: UnitSystem = UnitSystem.SI) -> SimpleNamespace:

@@ -28,11 +28,14 @@ def test_best_efficiency_is_told_without_an_inquiry(curve):
     done = invoke("curve", "curve.csv")
     assert done.exit_code == 0, done.stderr
     assert "best efficiency" in done.stdout
-    assert "specific speed" not in done.stdout
+    assert "specific speed nq" not in done.stdout
+    assert "left out: the file names no speed" in done.stdout
 
 
 def test_a_speed_adds_specific_speeds(curve):
-    assert "specific speed" in invoke("curve", "curve.csv", "--speed", "1480 rpm").stdout
+    shown = invoke("curve", "curve.csv", "--speed", "1480 rpm").stdout
+    assert "specific speed nq" in shown
+    assert "left out: the file names no speed" not in shown
 
 
 def test_units(curve):

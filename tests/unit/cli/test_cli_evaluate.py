@@ -58,6 +58,12 @@ def test_fail_on(fakes, fail_on, verdict, accepted, code):
     assert invoke("evaluate", "one", *option).exit_code == code
 
 
+@pytest.mark.parametrize(("fail_on", "code"), [("query", 3), ("fail", 0)])
+def test_an_incomplete_bid_counts_as_a_query(fakes, fail_on, code):
+    fakes.read["one"] = evaluation(finding("no-data", decisive=True))
+    assert invoke("evaluate", "one", "--fail-on", fail_on).exit_code == code
+
+
 def test_every_problem_on_a_line_of_standard_error(fakes):
     fakes.read["one"] = InputError(
         [Problem("bids/elm/bid.toml", "first", 2), Problem("bids/elm/curve.csv", "second", 9, 4)]
@@ -84,15 +90,21 @@ def test_another_error_on_purpose_needs_no_traceback(fakes):
     assert (done.exit_code, done.stderr) == (1, "flow asked beyond the points\n")
 
 
-def test_a_mistake_of_ours_is_one_line_that_says_so(fakes):
+def test_a_mistake_of_ours_is_two_lines_that_say_so(fakes):
     fakes.read["one"] = KeyError("head\x1b[2J\nbids/alder: forged line")
     done = invoke("evaluate", "one")
     assert done.exit_code == 1
-    (line,) = done.stderr.splitlines()
-    assert line.startswith("this is a mistake in bidcheck, please report it")
-    assert "KeyError" in line
-    assert "bidcheck/cli/evaluate_command.py:" in line
+    said, what = done.stderr.splitlines()
+    assert said.startswith("this is a mistake in bidcheck, not in your files; please report it")
+    assert what.startswith("KeyError")
+    assert "bidcheck/cli/evaluate_command.py:" in what
     assert "Traceback" not in done.output
+
+
+def test_trace_lets_a_mistake_of_ours_through(fakes):
+    fakes.read["one"] = KeyError("head")
+    assert isinstance(invoke("--trace", "evaluate", "one").exception, KeyError)
+    assert "--trace" not in invoke("--help").stdout
 
 
 def test_text_from_inputs_cannot_steer_the_terminal_or_forge_a_line(fakes):
