@@ -5,7 +5,7 @@ from typing import TYPE_CHECKING, NamedTuple
 
 import numpy as np
 
-from bidcheck.checks.npsh_margin import is_raised
+from bidcheck.checks.npsh_margin import is_raised, margins
 from bidcheck.evaluation import Evaluation
 from bidcheck.inquiry import Duty
 from bidcheck.limits import Limits
@@ -127,6 +127,5 @@ def _flows(duty: Duty) -> list[float]:
 
 def highest_npsh3(npsha: float, limits: Limits, raised: bool) -> float:
     """NPSH3 that just keeps the margin wanted, by difference and by ratio; the stricter governs. [m]"""
-    margin = limits.npsh_margin_raised if raised else limits.npsh_margin
-    share = limits.npsh_ratio_raised if raised else limits.npsh_ratio
+    margin, share = margins(limits, raised)
     return min(npsha - (margin.at_least or 0.0), npsha / (share.at_least or 1.0))

@@ -3,6 +3,7 @@
 from collections.abc import Callable
 from dataclasses import dataclass
 
+from bidcheck.checks.npsh_margin import margins
 from bidcheck.evaluation import BidEvaluation, Evaluation
 from bidcheck.finding import Verdict
 from bidcheck.limits import Limit, Limits
@@ -178,7 +179,7 @@ def _estimate(bid: BidEvaluation, name: str) -> float | None:
 def _margin_wanted(limits: Limits, system: UnitSystem) -> str:
     """The ordinary margin, and the raised one with the suction specific speed above which it is wanted."""
     words = _words(limits.npsh_margin, system)
-    raised, ordinary = limits.npsh_margin_raised.at_least, limits.nss_ordinary.at_most
+    raised, ordinary = margins(limits, raised=True)[0].at_least, limits.nss_ordinary.at_most
     if raised is None or ordinary is None or raised == limits.npsh_margin.at_least:
         return words
     high = figure(ordinary, Kind.SUCTION_SPECIFIC_SPEED, system)
