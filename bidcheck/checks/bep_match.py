@@ -10,6 +10,7 @@ from collections.abc import Iterator
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, text, whole_share
 from bidcheck.checks.request import asked
+from bidcheck.checks.verdicts import missed
 from bidcheck.curve import BestEfficiency
 from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
 from bidcheck.limits import within
@@ -39,7 +40,7 @@ def run(case: Case) -> Iterator[Measured]:
     short = limit.at_least is not None and rated / beyond < limit.at_least
     yield Measured(
         subject="rated",
-        verdict=Verdict.QUERY if short else Verdict.NO_DATA,
+        verdict=missed(limit, Verdict.QUERY) if short else Verdict.NO_DATA,
         limit=limit,
         evidence=evidence,
         wording="beyond the points",

@@ -13,6 +13,7 @@ import numpy as np
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, share, text
 from bidcheck.checks.request import asked, not_applicable
+from bidcheck.checks.verdicts import missed
 from bidcheck.curve import Column, Curve, Floats, Points
 from bidcheck.explain import (
     BALANCE,
@@ -137,7 +138,7 @@ def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measur
         small = within(off, limits.power_balance_scatter, slack=allowed).holds
         return Measured(
             subject="all points",
-            verdict=Verdict.REMARK if small else Verdict.QUERY,
+            verdict=Verdict.REMARK if small else missed(limits.power_balance_scatter, Verdict.QUERY),
             limit=limits.power_balance_scatter,
             evidence=evidence,
             wording="off",
