@@ -6,7 +6,7 @@ from bidcheck.bid import Bid
 from bidcheck.curve import Curve, Fit, Fits, Points
 from bidcheck.errors import OutOfRange
 from bidcheck.fit import fit_curve
-from bidcheck.hydraulics.viscous import viscosity_parameter, viscous_factors, viscous_head_factor
+from bidcheck.hydraulics.viscous import viscous_factors, viscous_head_factor, viscous_parameter
 from bidcheck.inquiry import Liquid
 from bidcheck.quantity import Assumption
 
@@ -80,7 +80,7 @@ def viscosity_matters(liquid: Liquid, bid: Bid, fits: Fits) -> bool:
     bep = fits.bep
     if bep is None or bep.head is None or bep.head <= 0:
         return False
-    return viscosity_parameter(liquid.viscosity, bep.head / bid.stages, bep.flow, bid.speed_rpm) > 1.0
+    return viscous_parameter(liquid.viscosity, bep.flow, bep.head / bid.stages, bid.speed_rpm) > 1.0
 
 
 def as_pumped(curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumptions: list[Assumption]) -> Fits | None:
@@ -115,13 +115,13 @@ def _viscous_fits(curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumption
         return None
     what = f"{curve.file}: as pumped"
     try:
-        factors = viscous_factors(liquid.viscosity, bep.head / bid.stages, bep.flow, bid.speed_rpm)
+        factors = viscous_factors(liquid.viscosity, bep.flow, bep.head / bid.stages, bid.speed_rpm)
     except OutOfRange as error:
         assumptions.append(Assumption(what, "not known", str(error)))
         return None
     words = f"C_Q {factors.flow:.4f}, C_η {factors.efficiency:.4f} (B {factors.parameter:.2f}); NPSH3 left as for water"
     assumptions.append(Assumption(what, words, "water curve corrected by ANSI/HI 9.6.7"))
-    C_H = viscous_head_factor(head.flow / bep.flow, factors.flow)
+    C_H = viscous_head_factor(factors.flow, head.flow / bep.flow)
     thick_head = replace(scaled_points(head, factors.flow), value=head.value * C_H)
     thick_efficiency = scaled_points(efficiency, factors.flow, factors.efficiency)
     corrected = replace(

@@ -3,33 +3,9 @@
 from dataclasses import dataclass
 from typing import Literal
 
+from bidcheck.arrangement import Arrangement
 from bidcheck.curve import Curve
 from bidcheck.quantity import Assumption, Stated
-
-Arrangement = Literal[
-    "end suction",
-    "close coupled",
-    "in-line",
-    "double suction",
-    "horizontal multistage",
-    "vertical multistage",
-    "submersible multistage",
-    "vertical turbine",
-    "solids handling",
-    "sealless",
-]
-ARRANGEMENTS: tuple[Arrangement, ...] = (
-    "end suction",
-    "close coupled",
-    "in-line",
-    "double suction",
-    "horizontal multistage",
-    "vertical multistage",
-    "submersible multistage",
-    "vertical turbine",
-    "solids handling",
-    "sealless",
-)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)

@@ -117,6 +117,10 @@ def motor_mistakes(motor_efficiency: float | None) -> tuple[Mistake, ...]:
     return (Mistake("power", 1.0 / motor_efficiency, "power is motor input, not shaft power"),)
 
 
+BALANCE: dict[Quantity, int] = {"flow": 1, "head": 1, "power": -1}
+"""How ρgQH/(Pη) depends on each quantity."""
+
+
 def mistakes_that_close(gap: float, exponents: dict[Quantity, int], mistakes: Iterable[Mistake]) -> tuple[str, ...]:
     """Name every single mistake that closes a gap.
 

@@ -13,7 +13,7 @@ from bidcheck.estimates.efficiency import estimate_efficiency
 from bidcheck.estimates.npsh3_expected import expected_npsh3
 from bidcheck.fit import fit_curve
 from bidcheck.hydraulics.specific_speed import specific_speed, suction_specific_speed
-from bidcheck.hydraulics.suction import npsh_available
+from bidcheck.hydraulics.suction import friction_loss_at, npsh_available
 from bidcheck.inquiry import Inquiry
 from bidcheck.quantity import Assumption
 
@@ -104,7 +104,7 @@ def npsh_available_at(inquiry: Inquiry, flow: float) -> float | None:
                 vapour_pressure=liquid.vapour_pressure,
                 density=liquid.density,
                 liquid_level=suction.liquid_level,
-                friction_loss=suction.friction_loss * (flow / duty.rated_flow) ** 2,
+                friction_loss=friction_loss_at(suction.friction_loss, duty.rated_flow, flow),
             )
         )
     if flow == duty.rated_flow:
@@ -146,7 +146,14 @@ def _with_claims(at: AtFlow, bid: Bid) -> AtFlow:
         if values[column] is None and claim is not None:
             values[column] = claim.value
             filled.append(column)
-    return replace(at, **values, from_claims=tuple(filled))
+    return replace(
+        at,
+        head=values["head"],
+        efficiency=values["efficiency"],
+        power=values["power"],
+        npsh3=values["npsh3"],
+        from_claims=tuple(filled),
+    )
 
 
 def _operating(inquiry: Inquiry, bid: Bid, pumped: Fits | None) -> tuple[tuple[str, AtFlow], ...]:
@@ -195,8 +202,8 @@ def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, water: str) -> 
         )
     head = bep.head / bid.stages
     eye_flow = bep.flow / bid.suction_eyes
-    nq = float(specific_speed(bid.speed_rpm, bep.flow, head))
-    nq_eye = float(specific_speed(bid.speed_rpm, eye_flow, head))
+    nq = specific_speed(bid.speed_rpm, bep.flow, head)
+    nq_eye = specific_speed(bid.speed_rpm, eye_flow, head)
     npsh3 = _value(fits.npsh3, bep.flow)
     efficiency = estimate_efficiency(
         arrangement=bid.arrangement,
@@ -205,16 +212,19 @@ def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, water: str) -> 
         flow=bep.flow,
         head_per_stage=head,
         speed_rpm=bid.speed_rpm,
+        stages=bid.stages,
+        suction_eyes=bid.suction_eyes,
         diameter=curve.impeller,
+        density=curve.density,
     )
     half_width = fits.efficiency.half_width(bep.flow) if fits.efficiency is not None else None
     return Estimates(
         nq=nq,
         nq_eye=nq_eye,
-        nss=float(suction_specific_speed(bid.speed_rpm, eye_flow, npsh3)) if npsh3 else None,
+        nss=suction_specific_speed(bid.speed_rpm, eye_flow, npsh3) if npsh3 is not None and npsh3 > 0 else None,
         basis=basis,
         efficiency=efficiency,
         offered_efficiency=bep.efficiency,
         offered_interval=half_width,
-        npsh3_expected=float(expected_npsh3(bid.speed_rpm, eye_flow)),
+        npsh3_expected=expected_npsh3(bid.speed_rpm, eye_flow).ordinary,
     )

@@ -85,9 +85,9 @@ def _rule(unit: str) -> Rewritten | None:
     return TO_US.get(unit)
 
 
-def _number(printed: str, rule: Rewritten, digits: int | None) -> str:
-    """One figure in its new unit, decimal mark as it was."""
-    comma = "," in printed
+def _number(printed: str, rule: Rewritten, digits: int | None, comma: bool = False) -> str:
+    """One figure in its new unit; decimal mark as it was, or a comma where the rest of the file has one."""
+    comma = comma or "," in printed
     plain = printed.replace(",", ".")
     value = float(plain) * rule.factor + rule.offset
     if digits is None:
@@ -118,18 +118,19 @@ def _csv(text: str, digits: int | None) -> str:
     separator = next((mark for mark in "\t;" if mark in lines[table[0]]), ",")
     units, rows = _units_of_columns(lines, table, separator)
     rules = [_rule(unit) for unit in units]
+    comma = separator != "," and any("," in lines[i] for i in rows)
     for i in rows:
         cells = lines[i].rstrip("\r\n").split(separator)
         end = lines[i][len(lines[i].rstrip("\r\n")) :]
-        cells = [_cell(cell, rule, digits) for cell, rule in zip(cells, rules, strict=True)]
+        cells = [_cell(cell, rule, digits, comma) for cell, rule in zip(cells, rules, strict=True)]
         lines[i] = separator.join(cells) + end
     return "".join(lines)
 
 
-def _cell(cell: str, rule: Rewritten | None, digits: int | None) -> str:
+def _cell(cell: str, rule: Rewritten | None, digits: int | None, comma: bool) -> str:
     """A cell in its new unit, spaces kept; blank ones stay blank."""
     printed = cell.strip()
-    return cell if rule is None or not printed else cell.replace(printed, _number(printed, rule, digits))
+    return cell if rule is None or not printed else cell.replace(printed, _number(printed, rule, digits, comma))
 
 
 def _units_of_columns(lines: list[str], table: list[int], separator: str) -> tuple[list[str], list[int]]:

@@ -10,6 +10,7 @@ from collections.abc import Iterator
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, text, whole_share
 from bidcheck.checks.request import asked
+from bidcheck.checks.verdicts import missed
 from bidcheck.curve import BestEfficiency
 from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
 from bidcheck.limits import within
@@ -39,7 +40,7 @@ def run(case: Case) -> Iterator[Measured]:
     short = limit.at_least is not None and rated / beyond < limit.at_least
     yield Measured(
         subject="rated",
-        verdict=Verdict.QUERY if short else Verdict.NO_DATA,
+        verdict=missed(limit, Verdict.QUERY) if short else Verdict.NO_DATA,
         limit=limit,
         evidence=evidence,
         wording="beyond the points",
@@ -68,8 +69,8 @@ CHECK = Check(
         "": Wording(
             "Rated flow {rated_flow} is {ratio} of best efficiency flow {bep_flow} at the offered diameter.",
             "At the offered diameter your points put best efficiency at {bep_flow}, so rated flow {rated_flow} is"
-            " {ratio} of it. Please offer a selection within {limit}, or show by operating data why this one will run"
-            " well.",
+            " {ratio} of it. Please offer a selection within {limit} of it, or show by operating data why this one"
+            " will run well.",
         ),
         "inside the interval": Wording(
             "Rated flow {rated_flow} is {ratio} of fitted best efficiency flow {bep_flow}, but the points fix that"

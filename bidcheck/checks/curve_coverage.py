@@ -10,6 +10,7 @@ from collections.abc import Iterator
 from bidcheck.case import Case
 from bidcheck.checks.evidence import count, flow, text, whole_share
 from bidcheck.checks.request import asked
+from bidcheck.checks.verdicts import missed
 from bidcheck.curve import COLUMNS, Column, Fits
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import within
@@ -73,7 +74,7 @@ def _ends(case: Case, fits: Fits) -> Iterator[Measured]:
     elif fits.bep_beyond is not None:
         yield Measured(
             subject="end of curve",
-            verdict=Verdict.REMARK,
+            verdict=missed(case.inquiry.limits.curve_beyond_bep, Verdict.REMARK),
             limit=case.inquiry.limits.curve_beyond_bep,
             evidence={"last_flow": flow(fits.bep_beyond)},
             wording="still rising",

@@ -12,6 +12,7 @@ import numpy as np
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, head, share
 from bidcheck.checks.request import asked
+from bidcheck.checks.verdicts import missed
 from bidcheck.curve import Fit, Points
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import within
@@ -43,10 +44,14 @@ def run(case: Case) -> Iterator[Measured]:
         yield Measured(subject="towards shutoff", holds=compared, evidence=evidence, wording="steady")
     elif parallel:
         yield Measured(
-            subject="towards shutoff", verdict=Verdict.QUERY, limit=limit, evidence=evidence, wording="parallel"
+            subject="towards shutoff",
+            verdict=missed(limit, Verdict.QUERY),
+            limit=limit,
+            evidence=evidence,
+            wording="parallel",
         )
     else:
-        yield Measured(subject="towards shutoff", verdict=Verdict.REMARK, limit=limit, evidence=evidence)
+        yield Measured(subject="towards shutoff", verdict=missed(limit, Verdict.REMARK), limit=limit, evidence=evidence)
 
 
 def _fit_droop(fit: Fit) -> tuple[float, float]:

@@ -38,7 +38,7 @@ def run(case: Case) -> Iterator[Measured]:
         "above_ceiling": points(max(claim - estimate.ceiling, 0.0)),
         "doubt": points(doubt),
     }
-    evidence |= {name: share(loss) for name, loss in estimate.ceiling_terms.items()}
+    evidence |= {name.replace(" ", "_"): share(loss) for name, loss in estimate.ceiling_terms.items()}
     compared = within(claim, limit, slack=doubt)
     yield Measured(
         subject="best efficiency", holds=compared, evidence=evidence, wording="" if compared.holds else "above"

@@ -49,7 +49,7 @@ def _limit(name: str, at_least: float | None, at_most: float | None, origin: str
 
 def _placed(case: Case, estimate: EfficiencyEstimate, claim: float) -> Measured:
     """The first step of the ladder that the claim stands on, from the top."""
-    high = _above(estimate, claim)
+    high = _above(estimate, claim, _doubt(case))
     step = high if high is not None else _below(estimate, claim)
     wording, verdict, limit = step if step is not None else ("", Verdict.PASS, _band(estimate))
     if estimate.expected is None:
@@ -75,22 +75,28 @@ def _band(estimate: EfficiencyEstimate) -> Limit | None:
     return _limit("efficiency_band", low, high, estimate.expected_from or CHART, "derived")
 
 
-def _above(estimate: EfficiencyEstimate, claim: float) -> tuple[str, Verdict, Limit] | None:
+def _doubt(case: Case) -> float:
+    """Half the 95 % interval of the fitted best efficiency, given to the bidder on the high side."""
+    interval = case.estimates.offered_interval
+    return interval if interval is not None and interval < float("inf") else 0.0
+
+
+def _above(estimate: EfficiencyEstimate, claim: float, doubt: float) -> tuple[str, Verdict, Limit] | None:
     """Steps above the expected value."""
     top, attainable, remark = estimate.implausible_above, estimate.attainable, estimate.remark_above
     if top is not None:
-        origin = f"a quarter of the losses left above the {CHART}"
+        origin = f"a quarter of the way to 100 % beyond the {CHART}"
         limit = _limit("efficiency_implausible", None, top, origin, "derived")
-        if not within(claim, limit).holds:
+        if not within(claim, limit, slack=doubt).holds:
             return "implausible", Verdict.QUERY, limit
     if attainable is not None:
         limit = _limit("efficiency_attainable", None, attainable, CHART, "text")
-        if not within(claim, limit).holds:
+        if not within(claim, limit, slack=doubt).holds:
             return "above attainable", Verdict.QUERY, limit
     if remark is not None:
         origin = "1.64 times the error of the estimate above the expected value"
         limit = _limit("efficiency_high", None, remark, origin, "derived")
-        if not within(claim, limit).holds:
+        if not within(claim, limit, slack=doubt).holds:
             return "high", Verdict.REMARK, limit
     return None
 

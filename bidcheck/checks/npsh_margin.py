@@ -8,10 +8,10 @@ with flow, so a pump that is safe at rated flow can cavitate at the largest.
 from collections.abc import Iterator
 
 from bidcheck.case import AtFlow, Case
-from bidcheck.checks.evidence import flow, npsh, ratio, suction_specific_speed
+from bidcheck.checks import evidence as ev
 from bidcheck.checks.request import asked, ours
 from bidcheck.finding import Check, Measured, Verdict, Wording
-from bidcheck.limits import Limit, within
+from bidcheck.limits import Comparison, Limit, Limits, within
 
 REQUESTED = {"rated": "NPSH3 at rated flow", "largest flow": "NPSH3 at the largest flow"}
 
@@ -38,34 +38,51 @@ def is_raised(case: Case, at: AtFlow) -> bool:
     return over_bep is None or not within(over_bep, limits.npsh_ordinary_region).holds
 
 
-def governing(case: Case, at: AtFlow, npsh3: float) -> Limit:
-    """Of margin and ratio, the one that asks for more NPSH available."""
-    limits = case.inquiry.limits
-    raised = is_raised(case, at)
-    margin = limits.npsh_margin_raised if raised else limits.npsh_margin
-    share = limits.npsh_ratio_raised if raised else limits.npsh_ratio
-    by_ratio = npsh3 * (share.at_least or 1.0)
-    return margin if npsh3 + (margin.at_least or 0.0) >= by_ratio else share
+def margins(limits: Limits, raised: bool) -> tuple[Limit, Limit]:
+    """Margin and ratio in force, ordinary or raised.
+
+    A margin the purchaser sets holds at any suction specific speed, unless the purchaser sets the raised one as well.
+    """
+    return (
+        _in_force(limits.npsh_margin, limits.npsh_margin_raised, raised),
+        _in_force(limits.npsh_ratio, limits.npsh_ratio_raised, raised),
+    )
+
+
+def _in_force(ordinary: Limit, higher: Limit, raised: bool) -> Limit:
+    """The ordinary limit or the raised one."""
+    own = ordinary.mark == "purchaser" and higher.mark != "purchaser"
+    return higher if raised and not own else ordinary
 
 
 def _margin(case: Case, subject: str, at: AtFlow, npsh3: float, npsha: float) -> Measured:
     """One flow."""
     limits = case.inquiry.limits
     evidence = {
-        "flow": flow(at.flow),
-        "npsha": npsh(npsha),
-        "npsh3": npsh(npsh3),
-        "margin": npsh(npsha - npsh3),
-        "ratio": ratio(npsha / npsh3),
+        "flow": ev.flow(at.flow),
+        "npsha": ev.npsh(npsha),
+        "npsh3": ev.npsh(npsh3),
+        "margin": ev.npsh(npsha - npsh3),
+        "ratio": ev.ratio(npsha / npsh3),
     }
     if case.estimates.nss is not None:
-        evidence["nss"] = suction_specific_speed(case.estimates.nss)
+        evidence["nss"] = ev.suction_specific_speed(case.estimates.nss)
     floor = within(npsha - npsh3, limits.npsh_floor)
     if not floor.holds:
         return Measured(subject=subject, holds=floor, evidence=evidence, wording="none left")
-    limit = governing(case, at, npsh3)
-    figure = npsha / npsh3 if limit.name.startswith("npsh_ratio") else npsha - npsh3
-    return Measured(subject=subject, holds=within(figure, limit), evidence=evidence)
+    return Measured(
+        subject=subject, holds=compare(margins(limits, is_raised(case, at)), npsh3, npsha), evidence=evidence
+    )
+
+
+def compare(wanted: tuple[Limit, Limit], npsh3: float, npsha: float) -> Comparison:
+    """The graver of both comparisons: a mandatory limit missed, else the one that asks for more NPSH available."""
+    margin, ratio = within(npsha - npsh3, wanted[0]), within(npsha / npsh3, wanted[1])
+    for compared in (margin, ratio):
+        if not compared.holds and compared.limit.mandatory:
+            return compared
+    by_margin = npsh3 + (wanted[0].at_least or 0.0) >= npsh3 * (wanted[1].at_least or 1.0)
+    return margin if by_margin else ratio
 
 
 CHECK = Check(

@@ -12,6 +12,7 @@ from bidcheck.case import Case
 from bidcheck.checks.curve_coverage import WORDS
 from bidcheck.checks.evidence import flow, head, npsh, power, share, text
 from bidcheck.checks.request import asked
+from bidcheck.checks.verdicts import missed
 from bidcheck.curve import COLUMNS, Column, Fits, OddPoint
 from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
 from bidcheck.limits import within
@@ -40,7 +41,7 @@ def _odd(case: Case, file: str, odd: OddPoint) -> Measured:
     kind = AS_EVIDENCE[odd.column]
     return Measured(
         subject=f"{name}:{odd.line} {odd.column}",
-        verdict=Verdict.QUERY if large else Verdict.REMARK,
+        verdict=missed(limit, Verdict.QUERY) if large else Verdict.REMARK,
         limit=limit,
         evidence={
             "quantity": text(WORDS[odd.column]),

@@ -13,8 +13,10 @@ import numpy as np
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, share, text
 from bidcheck.checks.request import asked, not_applicable
-from bidcheck.curve import Curve, Floats, Points
+from bidcheck.checks.verdicts import missed
+from bidcheck.curve import Column, Curve, Floats, Points
 from bidcheck.explain import (
+    BALANCE,
     UNIT_MISTAKES,
     density_mistakes,
     frequency_mistakes,
@@ -25,7 +27,7 @@ from bidcheck.explain import (
     stage_mistakes,
 )
 from bidcheck.finding import Check, Measured, Verdict, Wording
-from bidcheck.hydraulics.power_balance import balance_tolerance, efficiency_from_power
+from bidcheck.hydraulics.power_balance import efficiency_from_power, printed_digits_tolerance
 from bidcheck.limits import within
 
 DIGITS_AND = 0.005
@@ -53,7 +55,7 @@ def run(case: Case) -> Iterator[Measured]:
     yield from _single_points(case, *rows)
 
 
-def balanced_rows(curve: Curve, leave_out: set[tuple[str, int]]) -> tuple[Floats, Floats, Floats, Floats]:
+def balanced_rows(curve: Curve, leave_out: set[tuple[Column, int]]) -> tuple[Floats, Floats, Floats, Floats]:
     """Points where all four figures stand.
 
     Returns
@@ -63,14 +65,32 @@ def balanced_rows(curve: Curve, leave_out: set[tuple[str, int]]) -> tuple[Floats
     """
     columns = [points for points in (curve.head, curve.efficiency, curve.power) if points is not None]
     shared = sorted(set.intersection(*(set(points.line.tolist()) for points in columns)))
-    names = ("head", "efficiency", "power")
+    names: tuple[Column, ...] = ("head", "efficiency", "power")
     shared = [line for line in shared if not any((name, line) in leave_out for name in names)]
     H, eta, P = (_rows(points, shared) for points in columns)
     keep = (H[0] > 0) & (H[1] > 0) & (eta[1] > 0) & (P[1] > 0)
-    Q, H1, eta1, P1 = H[0][keep], H[1][keep], eta[1][keep], P[1][keep]
-    gap = efficiency_from_power(curve.density, Q, H1, P1) / eta1
-    tolerance = balance_tolerance(H[2][keep] / Q, H[3][keep] / H1, eta[3][keep] / eta1, P[3][keep] / P1)
-    return np.array(shared, dtype=float)[keep], Q, np.asarray(gap), np.asarray(tolerance) + DIGITS_AND
+    rows = [
+        _balance(curve.density, *figures)
+        for figures in zip(
+            zip(H[0][keep].tolist(), H[2][keep].tolist(), strict=True),
+            zip(H[1][keep].tolist(), H[3][keep].tolist(), strict=True),
+            zip(eta[1][keep].tolist(), eta[3][keep].tolist(), strict=True),
+            zip(P[1][keep].tolist(), P[3][keep].tolist(), strict=True),
+            strict=True,
+        )
+    ]
+    gap, tolerance = np.array([row[0] for row in rows]), np.array([row[1] for row in rows])
+    return np.array(shared, dtype=float)[keep], H[0][keep], gap, tolerance + DIGITS_AND
+
+
+Printed = tuple[float, float]
+"""A figure and half a unit in its last printed place."""
+
+
+def _balance(density: float, flow: Printed, head: Printed, efficiency: Printed, power: Printed) -> Printed:
+    """Gap and tolerance of one point."""
+    gap = efficiency_from_power(density, flow[0], head[0], power[0]) / efficiency[0]
+    return gap, printed_digits_tolerance(flow=flow, head=head, power=power, efficiency=efficiency)
 
 
 def _rows(points: Points, lines: list[int]) -> tuple[Floats, Floats, Floats, Floats]:
@@ -95,7 +115,7 @@ def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measur
         return Measured(subject="all points", verdict=Verdict.PASS, limit=limits.power_balance, evidence=evidence)
     mistakes = mistakes_that_close(
         middle,
-        {"flow": 1, "head": 1, "power": -1},
+        BALANCE,
         (
             *UNIT_MISTAKES,
             *stage_mistakes(bid.stages),
@@ -118,7 +138,7 @@ def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measur
         small = within(off, limits.power_balance_scatter, slack=allowed).holds
         return Measured(
             subject="all points",
-            verdict=Verdict.REMARK if small else Verdict.QUERY,
+            verdict=Verdict.REMARK if small else missed(limits.power_balance_scatter, Verdict.QUERY),
             limit=limits.power_balance_scatter,
             evidence=evidence,
             wording="off",
@@ -175,7 +195,7 @@ CHECK = Check(
             "Efficiency that follows from flow, head and power is only {followed_over_stated} of that stated. One"
             " mistake would close the gap: {mistakes}.",
             "Your head, power and efficiency disagree: ρgQH/P comes to {followed_over_stated} of the stated"
-            " efficiency. It would agree if {mistakes}. Please confirm and correct.",
+            " efficiency. It looks as if {mistakes}. Please confirm and correct.",
         ),
         "contradiction": Wording(
             "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, off by"

@@ -12,6 +12,7 @@ from bidcheck.checks.curve_coverage import WORDS
 from bidcheck.checks.evidence import share, text
 from bidcheck.checks.odd_point import AS_EVIDENCE
 from bidcheck.checks.request import not_applicable
+from bidcheck.checks.verdicts import missed
 from bidcheck.curve import COLUMNS, Column, Fit
 from bidcheck.explain import (
     UNIT_MISTAKES,
@@ -71,7 +72,7 @@ def _compared(
     careful = (gap < 1.0) is MORE_IS_BETTER[column]
     return Measured(
         subject=subject,
-        verdict=Verdict.REMARK if careful else Verdict.QUERY,
+        verdict=Verdict.REMARK if careful else missed(limit, Verdict.QUERY),
         limit=limit,
         evidence=evidence,
         wording="careful" if careful else "better",
@@ -124,7 +125,7 @@ CHECK = Check(
         "explained": Wording(
             "Claimed {quantity} {claim} is off the bidder's own curve, {curve}, by {gap}. One mistake would close the"
             " gap: {mistakes}.",
-            "You claim {quantity} {claim} where your curve gives {curve}. They would agree if {mistakes}. Please"
+            "You claim {quantity} {claim} where your curve gives {curve}. It looks as if {mistakes}. Please"
             " confirm and correct.",
         ),
     },

@@ -4,6 +4,7 @@ from collections.abc import Iterable
 
 from bidcheck.case import Case
 from bidcheck.checks.request import COMMON
+from bidcheck.checks.verdicts import missed
 from bidcheck.finding import Check, Finding, Measured, Verdict, Wording
 
 
@@ -13,12 +14,7 @@ def verdict_of(check: Check, measured: Measured) -> Verdict:
         return measured.verdict
     if measured.holds is None:
         raise ValueError(f"{check.name}: a comparison needs a verdict or a comparison with a limit")
-    limit = measured.holds.limit
-    if measured.holds.holds:
-        return Verdict.PASS
-    if limit.mandatory:
-        return Verdict.FAIL
-    return Verdict(limit.missed) if limit.missed is not None else check.otherwise
+    return Verdict.PASS if measured.holds.holds else missed(measured.holds.limit, check.otherwise)
 
 
 def wording_of(check: Check, measured: Measured) -> Wording:

@@ -24,15 +24,15 @@ def run(case: Case) -> Iterator[Measured]:
         yield asked("best efficiency", missing)
         return
     try:
-        low, high = specific_speed_window(bep.flow)
+        window = specific_speed_window(bep.flow)
     except OutOfRange as error:
         yield not_applicable("best efficiency", str(error))
         return
     limit = Limit(
         "specific_speed_window",
         Kind.SPECIFIC_SPEED,
-        low,
-        high,
+        window.low,
+        window.high,
         "ends of the curves of the Hydraulic Institute chart of attainable efficiency",
         "text",
     )

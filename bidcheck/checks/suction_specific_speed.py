@@ -25,7 +25,7 @@ def run(case: Case) -> Iterator[Measured]:
     high = within(nss, limits.suction_specific_speed_high)
     ordinary = within(nss, limits.suction_specific_speed)
     evidence = {"nss": suction_specific_speed(nss), "basis": text(case.estimates.basis)}
-    if not high.holds and not case.bid.inducer:
+    if not high.holds and not case.bid.inducer and not (ordinary.limit.mandatory and not ordinary.holds):
         yield Measured(subject="best efficiency", holds=high, evidence=evidence, wording="no inducer")
     else:
         yield Measured(subject="best efficiency", holds=ordinary, evidence=evidence)

@@ -1,22 +1,23 @@
-"""Estimates shown for context; they never decide a verdict."""
+"""Estimates of efficiency shown beside the others for context; they decide nothing."""
 
 import math
 
-from bidcheck.errors import OutOfRange
+from bidcheck.hydraulics.ranges import require_inside, require_positive
+from bidcheck.hydraulics.specific_speed import US_GALLON
 
 
-def corripio_efficiency(flow_gpm: float) -> float:
-    """Efficiency by flow alone.
+def corripio_efficiency(flow: float) -> float:
+    """Efficiency by flow alone, used for cost estimates of process plants.
 
     Parameters
     ----------
-    flow_gpm : float
-        [US gpm]
+    flow : float
+        Flow. [m³/s]
 
     Returns
     -------
     float
-        [fraction]
+        Efficiency. [fraction]
 
     Raises
     ------
@@ -25,53 +26,52 @@ def corripio_efficiency(flow_gpm: float) -> float:
 
     Notes
     -----
-    η = -0.316 + 0.24015 ln Q - 0.01199 ln²Q.
-    Valid for: 50 to 5000 US gpm.
-    Source: Corripio, Chrien and Evans, Chemical Engineering 89 (1982).
+    η = −0.316 + 0.24015 ln Q − 0.01199 ln²Q, US gpm.
+    Source: Corripio, Chrien and Evans (1982), Chemical Engineering
+    Valid for: 50 to 5000 US gpm
     Mark: crossed
 
     Examples
     --------
-    >>> corripio_efficiency(461.0)
+    >>> corripio_efficiency(461 * 231 * 0.0254**3 / 60)
     0.70589
     """
-    if not 50.0 <= flow_gpm <= 5000.0:
-        raise OutOfRange(f"asked at {flow_gpm:.4g} US gpm; holds from 50 to 5000 US gpm")
-    q = math.log(flow_gpm)
-    return -0.316 + 0.24015 * q - 0.01199 * q * q
+    gpm = flow * 60.0 / US_GALLON
+    require_inside("flow", gpm, 50.0, 5000.0, unit="US gpm")
+    return -0.316 + 0.24015 * math.log(gpm) - 0.01199 * math.log(gpm) ** 2
 
 
 def anderson_efficiency(nq: float, flow: float) -> float:
-    """Statistical efficiency by flow and specific speed.
+    """Efficiency from a statistical comparison of pumps.
 
     Parameters
     ----------
     nq : float
+        Specific speed. [1/min, m³/s, m per stage]
     flow : float
-        [m³/s]
+        Best efficiency flow. [m³/s]
 
     Returns
     -------
     float
-        [fraction]
+        Efficiency. [fraction]
 
     Raises
     ------
     OutOfRange
-        Outside 0.001 to 10 m³/s or nq 7 to 100, where others of its kind hold.
+        If a figure is not positive.
 
     Notes
     -----
-    η = 0.94 - 0.048 Q^-0.32 - 0.29 [log10(nq/44)]².
-    Valid for: 0.001 to 10 m³/s, nq 7 to 100 (range by common practice, no source).
-    Source: Anderson, as printed in the Pump Handbook (from memory).
+    η = 0.94 − 0.048 Q^−0.32 − 0.29 [log₁₀(nq/44)]², m³/s.
+    Source: from memory, Anderson, as printed in the Pump Handbook
+    Valid for: not stated by the source as recalled; any positive figures
     Mark: memory
 
     Examples
     --------
-    >>> anderson_efficiency(36.2, 0.2778)
-    0.866
+    >>> anderson_efficiency(44.0, 1.0)
+    0.892
     """
-    if not 0.001 <= flow <= 10.0 or not 7.0 <= nq <= 100.0:
-        raise OutOfRange(f"asked at {3600 * flow:.4g} m³/h and nq {nq:.3g}")
-    return float(0.94 - 0.048 * flow**-0.32 - 0.29 * math.log10(nq / 44.0) ** 2)
+    require_positive(specific_speed=nq, flow=flow)
+    return 0.94 - 0.048 * math.pow(flow, -0.32) - 0.29 * math.log10(nq / 44.0) ** 2

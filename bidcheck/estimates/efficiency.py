@@ -1,205 +1,148 @@
-"""The independent picture of efficiency at best efficiency: how the sources are combined.
+"""The independent picture of efficiency for one best efficiency point: what to expect, what is attainable, what the
+losses forbid, and from where on a claim is worth a remark or a query.
 
-nq per eye, flow total, head per stage throughout. Two spreads must not be confused: sigma is the spread of merit
-between pumps on the market; the error of the estimate on one honest pump is about 1.6 to 2.7 points above 60 m³/h.
+Specific speed is taken per suction eye, flow in total, head per stage throughout; the attainable efficiency alone also
+looks at the specific speed of total flow and keeps the more generous.
 """
 
 import math
+from typing import NamedTuple
 
-from bidcheck.case import EfficiencyEstimate, Source
+from bidcheck.arrangement import Arrangement
+from bidcheck.case import EfficiencyEstimate
 from bidcheck.errors import OutOfRange
-from bidcheck.estimates.efficiency_sources import (
-    MULTISTAGE,
-    Pump,
-    chart_source,
-    classes_of,
-    context_sources,
-    guelich_source,
-    market_source,
-)
-from bidcheck.estimates.head_coefficient import best_head_coefficient, impeller_diameter
-from bidcheck.estimates.loss_ceiling import LossBalance, efficiency_ceiling
-from bidcheck.estimates.market_surface import (
-    ESOB_1450,
-    HIGHEST_FLOW,
-    HIGHEST_NQ,
-    LOWEST_FLOW,
-    LOWEST_NQ,
-    nominal_flow,
-)
+from bidcheck.estimates.expected import MULTISTAGE, expected_efficiency
+from bidcheck.estimates.loss_ceiling import LossBalance
+from bidcheck.estimates.shape import Shape, attainable_of, ceiling_of
+from bidcheck.estimates.sources import efficiency_sources
+from bidcheck.hydraulics.ranges import inside, require_positive
 
-NO_EXPECTATION = ("solids handling", "vertical turbine", "sealless")
-"""Arrangements of which nothing is said on the low side."""
+LEAST_FLOW = 6.0
+"""Flow below which nothing is judged [m³/h]. Source: scope of Regulation (EU) No 547/2012."""
 
-FADE = 0.2
-"""Share of the (logarithmic) range of the survey over which it gives way to Gülich's formula."""
-FADE_IN = 0.3
-"""Span of ln Q above 18 m³/h over which Gülich's formula comes in."""
-LEAST_FLOW = 6.0 / 3600.0
-"""Below this nothing is judged [m³/s]."""
-SMALL_FLOW = 18.0 / 3600.0
-NARROW_NQ = 12.0
+IMPLAUSIBLE_SHARE = 0.25
+"""Share of the losses left at the attainable efficiency beyond which a claim is implausible. Source: common practice,
+no source."""
+
+REMARK_HIGH_Z, REMARK_LOW_Z, QUERY_LOW_Z = 1.64, 1.28, 2.0
+"""Normal quantiles of one in twenty, one in ten and one in forty-four."""
+
+LEAST_ERROR, ERROR_SHARE = 0.025, 0.15
+"""Error of the expected efficiency on the high side: the larger of 2.5 points and 0.15 of 1 − c. Derived from the
+scatter of the sources about one another."""
+
+SMALL_FLOW, NARROW_NQ = 18.0, 12.0
+"""Below this flow [m³/h] or specific speed a low efficiency is ordinary. Source: common practice, no source."""
+
+_LENIENT: tuple[Arrangement, ...] = ("solids handling", "sealless", "vertical turbine", *MULTISTAGE)
 
 
-def _edge(value: float, low: float, high: float, lower_edge: bool) -> float:
-    """1 inside a range, falling to 0 over its last fifth (logarithmic) at the upper and, if asked, the lower edge."""
-    span = FADE * math.log(high / low)
-    top = math.log(high / value) / span
-    bottom = math.log(value / low) / span if lower_edge else math.inf
-    return min(max(min(top, bottom), 0.0), 1.0)
+class Thresholds(NamedTuple):
+    """From where on an efficiency at best efficiency point is remarkable; None where there is no basis. [fraction]"""
+
+    implausible_above: float | None
+    remark_above: float | None
+    remark_below: float | None
+    query_below: float | None
 
 
-def _ceiling(pump: Pump) -> LossBalance | None:
-    """Loss ceiling at the offered diameter, else at the diameter of 1.2 times the usual head coefficient."""
-    try:
-        diameter = pump.diameter or impeller_diameter(
-            pump.head_per_stage, pump.speed_rpm, 1.2 * best_head_coefficient(pump.nq_eye)
-        )
-        return efficiency_ceiling(
-            nq=pump.nq_eye,
-            flow=pump.flow,
-            head_per_stage=pump.head_per_stage,
-            speed_rpm=pump.speed_rpm,
-            diameter=diameter,
-            viscosity=pump.viscosity,
-        )
-    except OutOfRange:
-        return None
-
-
-def _survey_weight(pump: Pump) -> float:
-    """How much the survey counts against Gülich's formula, 1 inside its range and 0 at its edges."""
-    weights = []
-    for one in classes_of(pump):
-        flow = nominal_flow(pump.flow, pump.speed_rpm, one.nominal_speed_rpm)
-        if not LOWEST_FLOW <= flow <= HIGHEST_FLOW or not LOWEST_NQ <= pump.nq_eye <= HIGHEST_NQ:
-            return 0.0
-        by_flow = _edge(flow, LOWEST_FLOW, HIGHEST_FLOW, lower_edge=False)
-        weights.append(min(by_flow, _edge(pump.nq_eye, LOWEST_NQ, HIGHEST_NQ, lower_edge=True)))
-    return min(weights, default=0.0)
-
-
-def _offset(pump: Pump) -> float:
-    """How far the class lies below Gülich's formula [fraction]; double suction as end suction of 1450 1/min."""
-    classes = classes_of(pump) or (ESOB_1450,)
-    return math.fsum(one.offset for one in classes) / len(classes) / 100.0
-
-
-def _expected(pump: Pump, market: Source, guelich: Source) -> tuple[float | None, str, float]:
-    """Expected value, where it comes from, and the weight of the survey in it."""
-    if pump.arrangement in NO_EXPECTATION:
-        return None, "", 0.0
-    shifted = None if guelich.value is None else guelich.value - _offset(pump)
-    if market.value is None:
-        if shifted is None:
-            return None, "", 0.0
-        return shifted, f"{guelich.name}, less the mean distance of the class", 0.0
-    if shifted is None:
-        return market.value, market.name, 1.0
-    weight = _survey_weight(pump)
-    arrived = min(max(math.log(pump.flow / SMALL_FLOW) / FADE_IN, 0.0), 1.0)
-    share = 1.0 - arrived * (1.0 - weight)
-    value = share * market.value + (1.0 - share) * shifted
-    if share == 1.0:
-        return value, market.name, 1.0
-    return value, f"{market.name}, giving way to {guelich.name} near the edge of the survey", share
-
-
-def _sigma(pump: Pump) -> float | None:
-    """Spread of merit on the market [fraction]; double suction is given that of end suction."""
-    if pump.arrangement in NO_EXPECTATION:
-        return None
-    classes = classes_of(pump) or (ESOB_1450,)
-    return math.fsum(one.sigma for one in classes) / len(classes) / 100.0
-
-
-def estimate_efficiency(
-    *,
-    arrangement: str,
-    nq: float,
-    nq_eye: float,
-    flow: float,
-    head_per_stage: float,
-    speed_rpm: float,
-    diameter: float | None = None,
-    viscosity: float = 1.0e-6,
-) -> EfficiencyEstimate:
-    """Combine the independent sources into one picture of efficiency at best efficiency.
+def claim_thresholds(expected: float | None, attainable: float | None, spread: float | None) -> Thresholds:
+    """Thresholds for a claimed efficiency at best efficiency point.
 
     Parameters
     ----------
-    arrangement : str
-        One of `bidcheck.bid.ARRANGEMENTS`.
-    nq, nq_eye : float
-        Specific speed for total flow and per suction eye, head per stage.
-    flow : float
-        Total flow at best efficiency. [m³/s]
-    head_per_stage, speed_rpm : float
-        [m, 1/min]
-    diameter : float, optional
-        Impeller diameter the curve belongs to. [m]
-    viscosity : float
-        Kinematic viscosity of the liquid the curve is for. [m²/s]
+    expected, attainable : float or None
+        c and A. [fraction]
+    spread : float or None
+        Spread of merit on the market, σ. [fraction]
 
     Returns
     -------
-    EfficiencyEstimate
-        Every source with its range, and the thresholds; a reason where nothing can be judged.
+    Thresholds
+        A + 0.25(1 − A); c + 1.64 max(0.025, 0.15(1 − c)); c − 1.28 σ; c − 2 σ.
 
     Notes
     -----
-    Expected c: middle of the surveyed market inside its range, outside it Gülich less the mean distance of the class.
-    Attainable A: the chart, never below Gülich. Implausible above A + 0.25 (1 - A); remark above
-    c + 1.64 max(0.025, 0.15 (1 - c)); remark below c - 1.28 σ, query below c - 2 σ.
-    Valid for: 6 m³/h and more.
-    Source: Regulation (EU) 547/2012; Gülich Table 3.9; Hydraulic Institute chart; combination derived.
+    Source: combination of the published sources, see `estimate_efficiency`
+    Valid for: fractions
     Mark: derived
 
     Examples
     --------
-    >>> estimate = estimate_efficiency(
-    ...     arrangement="end suction", nq=27.85, nq_eye=27.85, flow=130 / 3600, head_per_stage=55.0, speed_rpm=2960
-    ... )
-    >>> round(estimate.expected, 4), round(estimate.attainable, 4)
-    (0.7785, 0.8497)
+    >>> claim_thresholds(0.80, 0.85, 0.05)
+    Thresholds(implausible_above=0.8875, remark_above=0.8492, remark_below=0.736, query_below=0.7)
     """
-    pump = Pump(arrangement, nq, nq_eye, flow, head_per_stage, speed_rpm, diameter, viscosity)
-    market, guelich, chart = market_source(pump), guelich_source(pump), chart_source(pump)
-    sources = (market, guelich, chart, *context_sources(pump))
-    if flow < LEAST_FLOW:
-        return _nothing(sources, f"best efficiency flow {3600 * flow:.3g} m³/h is below 6 m³/h, where no source holds")
-    c, origin, weight = _expected(pump, market, guelich)
-    attainable = None if chart.value is None else max(chart.value, guelich.value or 0.0)
-    balance = _ceiling(pump)
-    if c is None and attainable is None and balance is None:
-        return _nothing(sources, "flow and specific speed lie outside the range of every source")
-    sigma = _sigma(pump) if c is not None else None
-    classes = classes_of(pump)
-    return EfficiencyEstimate(
-        sources=sources,
-        market_class=" and ".join(one.name for one in classes) if weight > 0.0 else "",
-        expected=c,
-        expected_from=origin,
-        attainable=attainable,
-        ceiling=None if balance is None else balance.efficiency,
-        ceiling_terms={} if balance is None else {"leakage": balance.leakage, "disc_friction": balance.disc_friction},
-        sigma=sigma,
-        implausible_above=None if attainable is None else attainable + 0.25 * (1.0 - attainable),
-        remark_above=None if c is None else c + 1.64 * max(0.025, 0.15 * (1.0 - c)),
-        remark_below=None if c is None or sigma is None else c - 1.28 * sigma,
-        query_below=None if c is None or sigma is None else c - 2.0 * sigma,
-        lenient_low=flow < SMALL_FLOW or nq_eye < NARROW_NQ or arrangement in (*MULTISTAGE, *NO_EXPECTATION),
-        reason="",
+    implausible = None if attainable is None else attainable + IMPLAUSIBLE_SHARE * (1.0 - attainable)
+    if expected is None:
+        return Thresholds(implausible, None, None, None)
+    high = expected + REMARK_HIGH_Z * max(LEAST_ERROR, ERROR_SHARE * (1.0 - expected))
+    if spread is None:
+        return Thresholds(implausible, high, None, None)
+    return Thresholds(implausible, high, expected - REMARK_LOW_Z * spread, expected - QUERY_LOW_Z * spread)
+
+
+def is_lenient(arrangement: Arrangement, nq_eye: float, flow: float) -> bool:
+    """Whether a low claim is never more than a remark.
+
+    Parameters
+    ----------
+    arrangement : str
+        Arrangement of the bid.
+    nq_eye : float
+        Specific speed per suction eye. [1/min, m³/s, m per stage]
+    flow : float
+        Best efficiency flow, total. [m³/s]
+
+    Returns
+    -------
+    bool
+        True for solids-handling, sealless, vertical turbine and multistage pumps, below 18 m³/h and below nq 12.
+
+    Notes
+    -----
+    Source: common practice, no source
+    Valid for: any positive figures
+    Mark: practice
+
+    Examples
+    --------
+    >>> is_lenient("end suction", 30.0, 100 / 3600), is_lenient("end suction", 11.9, 100 / 3600)
+    (False, True)
+    """
+    small = not inside(3600.0 * flow, SMALL_FLOW, math.inf)
+    return arrangement in _LENIENT or small or not inside(nq_eye, NARROW_NQ, math.inf)
+
+
+def _attainable(shape: Shape) -> float | None:
+    """Attainable efficiency, None outside the chart."""
+    try:
+        return attainable_of(shape)
+    except OutOfRange:
+        return None
+
+
+def _ceiling(shape: Shape) -> LossBalance | None:
+    """Ceiling, None outside its range."""
+    try:
+        return ceiling_of(shape)
+    except OutOfRange:
+        return None
+
+
+def _refused(shape: Shape, reason: str) -> EfficiencyEstimate:
+    """An estimate that judges nothing, with the reason; the sources are still shown."""
+    expected = expected_efficiency(
+        arrangement=shape.arrangement,
+        nq_eye=shape.nq_eye,
+        flow=shape.flow,
+        speed_rpm=shape.speed_rpm,
+        stages=shape.stages,
     )
-
-
-def _nothing(sources: tuple[Source, ...], reason: str) -> EfficiencyEstimate:
-    """An estimate that refuses to judge."""
     return EfficiencyEstimate(
-        sources=sources,
+        sources=efficiency_sources(shape, expected),
         market_class="",
         expected=None,
-        expected_from="",
+        expected_from=f"no expected efficiency: {reason}",
         attainable=None,
         ceiling=None,
         ceiling_terms={},
@@ -208,6 +151,118 @@ def _nothing(sources: tuple[Source, ...], reason: str) -> EfficiencyEstimate:
         remark_above=None,
         remark_below=None,
         query_below=None,
-        lenient_low=True,
+        lenient_low=is_lenient(shape.arrangement, shape.nq_eye, shape.flow),
         reason=reason,
+    )
+
+
+def _checked(shape: Shape, suction_eyes: int) -> None:
+    """Refuse figures that are no best efficiency point."""
+    figures = {name: getattr(shape, name) for name in ("nq", "nq_eye", "flow", "head_per_stage", "speed_rpm")}
+    require_positive(**figures, viscosity=shape.viscosity, density=shape.density, stages=shape.stages)
+    if shape.diameter is not None:
+        require_positive(diameter=shape.diameter)
+    if not math.isclose(shape.nq_eye * math.sqrt(suction_eyes), shape.nq, rel_tol=1e-3):
+        raise ValueError(f"nq {shape.nq:g} and nq per eye {shape.nq_eye:g} disagree for {suction_eyes} suction eyes")
+
+
+def estimate_efficiency(
+    *,
+    arrangement: Arrangement,
+    nq: float,
+    nq_eye: float,
+    flow: float,
+    head_per_stage: float,
+    speed_rpm: float,
+    stages: int = 1,
+    suction_eyes: int = 1,
+    diameter: float | None = None,
+    viscosity: float = 1.0e-6,
+    density: float = 998.2,
+) -> EfficiencyEstimate:
+    """Independent picture of the efficiency at one best efficiency point.
+
+    Parameters
+    ----------
+    arrangement : str
+        Arrangement of the bid.
+    nq, nq_eye : float
+        Specific speed on total flow, and per suction eye. [1/min, m³/s, m per stage]
+    flow, head_per_stage : float
+        Best efficiency point: total flow, head of one stage. [m³/s, m]
+    speed_rpm : float
+        Rotational speed. [1/min]
+    stages, suction_eyes : int
+        Number of stages, and of suction eyes of one impeller.
+    diameter : float or None
+        Outer diameter of the impeller the point belongs to; None where the bid states none. [m]
+    viscosity, density : float
+        Of the liquid the efficiency is stated for. [m²/s, kg/m³]
+
+    Returns
+    -------
+    EfficiencyEstimate
+        Expected, attainable, ceiling, thresholds, and every source with its value or the reason why it gives none.
+        `sigma` and `market_class` are filled only where the survey itself gives a median.
+
+    Raises
+    ------
+    OutOfRange
+        If a figure is not positive.
+    ValueError
+        If the two specific speeds disagree for the number of eyes.
+
+    Notes
+    -----
+    c by `expected_efficiency`; A the chart, the more generous of the two specific speeds, not below Gülich; ceiling by
+    `loss_ceiling` with the offered diameter, else that of 1.2 times the optimum head coefficient.
+    Source: Regulation (EU) No 547/2012; Gülich, Centrifugal Pumps; Hydraulic Institute chart; Daily and Nece (1960)
+    Valid for: from 6 m³/h, nq 7 to 100; what a source does not cover is None with its reason
+    Mark: derived
+
+    Examples
+    --------
+    >>> estimate = estimate_efficiency(arrangement="end suction", nq=27.85, nq_eye=27.85, flow=130 / 3600,
+    ...                                head_per_stage=55.0, speed_rpm=2960, diameter=0.214)
+    >>> round(estimate.expected, 3), round(estimate.attainable, 3), round(estimate.ceiling, 3)
+    (0.779, 0.85, 0.92)
+    """
+    shape = Shape(
+        arrangement=arrangement,
+        nq=nq,
+        nq_eye=nq_eye,
+        flow=flow,
+        head_per_stage=head_per_stage,
+        speed_rpm=speed_rpm,
+        stages=stages,
+        diameter=diameter,
+        viscosity=viscosity,
+        density=density,
+    )
+    _checked(shape, suction_eyes)
+    if not inside(3600.0 * flow, LEAST_FLOW, math.inf):
+        return _refused(shape, f"flow {3600.0 * flow:.3g} m³/h is below 6 m³/h, the least any source covers")
+    expected = expected_efficiency(
+        arrangement=arrangement, nq_eye=nq_eye, flow=flow, speed_rpm=speed_rpm, stages=stages
+    )
+    attainable, balance = _attainable(shape), _ceiling(shape)
+    if expected.value is None and attainable is None and balance is None:
+        return _refused(shape, f"specific speed nq {nq_eye:.3g} is outside every source")
+    thresholds = claim_thresholds(expected.value, attainable, expected.spread)
+    surveyed = expected.median is not None
+    return EfficiencyEstimate(
+        sources=efficiency_sources(shape, expected),
+        market_class=" and ".join(one.name for one in expected.classes) if surveyed else "",
+        expected=expected.value,
+        expected_from=expected.origin,
+        attainable=attainable,
+        ceiling=None if balance is None else balance.efficiency,
+        ceiling_terms={} if balance is None else dict(balance.terms),
+        sigma=expected.spread if surveyed else None,
+        implausible_above=thresholds.implausible_above,
+        remark_above=thresholds.remark_above,
+        remark_below=thresholds.remark_below,
+        query_below=thresholds.query_below,
+        lenient_low=is_lenient(arrangement, nq_eye, flow),
+        reason="",
     )

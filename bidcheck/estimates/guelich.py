@@ -1,93 +1,135 @@
-"""Efficiency at best efficiency by Gülich, Centrifugal Pumps, Table 3.9."""
+"""Statistical efficiency of pumps with radial impellers after Gülich, Centrifugal Pumps, Table 3.9."""
 
 import math
 
-from bidcheck.errors import OutOfRange
+from bidcheck.hydraulics.ranges import require_inside
+
+LOWEST_FLOW = 18.0
+"""Least flow of the table [m³/h], 0.005 m³/s."""
+
+LOWEST_NQ, HIGHEST_NQ = 7.0, 100.0
+"""Range of specific speed of the table."""
+
+SCATTER = 0.2
+"""Scatter of single pumps as a share of 1 − η. Source: from memory, Gülich."""
 
 
-def _exponent(flow: float, nq: float, factor: float) -> float:
+def _exponent(factor: float, nq: float, flow: float) -> float:
+    """Exponent m of the table, and the range of the table."""
+    require_inside("flow", flow, LOWEST_FLOW, math.inf, unit="m³/h", factor=3600.0)
+    require_inside("specific speed nq", nq, LOWEST_NQ, HIGHEST_NQ)
     a = 1.0 if flow <= 1.0 else 0.5
-    return float(factor * a * (1.0 / flow) ** 0.15 * (45.0 / nq) ** 0.06)
+    return factor * a * math.pow(1.0 / flow, 0.15) * math.pow(45.0 / nq, 0.06)
 
 
-def _in_range(flow: float, nq: float) -> None:
-    if flow < 0.005 * (1 - 1e-9) or not 7.0 * (1 - 1e-9) <= nq <= 100.0 * (1 + 1e-9):
-        raise OutOfRange(f"asked at {3600 * flow:.4g} m³/h and nq {nq:.3g}; holds from 18 m³/h, nq 7 to 100")
-
-
-def single_stage_efficiency(nq: float, flow: float) -> float:
-    """Best efficiency of a single-stage pump.
+def guelich_single_stage(nq: float, flow: float) -> float:
+    """Efficiency of a single-stage pump.
 
     Parameters
     ----------
     nq : float
-        Specific speed per eye.
+        Specific speed per suction eye. [1/min, m³/s, m per stage]
     flow : float
-        Flow at best efficiency. [m³/s]
+        Best efficiency flow, total. [m³/s]
 
     Returns
     -------
     float
-        [fraction]
+        Efficiency at best efficiency point. [fraction]
 
     Raises
     ------
     OutOfRange
-        Below 18 m³/h or outside nq 7 to 100.
+        Outside the range below.
 
     Notes
     -----
-    η = 1 - 0.095 (1/Q)^m - 0.3 [0.35 - log10(nq/23)]² (1/Q)^0.05, m = 0.1 a (1/Q)^0.15 (45/nq)^0.06,
-    a = 1 up to 1 m³/s and 0.5 above.
-    Valid for: 0.005 m³/s and more, nq 7 to 100.
-    Source: Gülich, Centrifugal Pumps, Table 3.9.
+    η = 1 − 0.095 (1/Q)^m − 0.3 [0.35 − log₁₀(nq/23)]² (1/Q)^0.05, m = 0.1 a (1/Q)^0.15 (45/nq)^0.06;
+    a = 1 up to 1 m³/s, 0.5 above.
+    Source: Gülich, Centrifugal Pumps, Table 3.9
+    Valid for: from 0.005 m³/s (18 m³/h), nq 7 to 100
     Mark: crossed
 
     Examples
     --------
-    >>> single_stage_efficiency(20.0, 0.010)
+    >>> guelich_single_stage(20.0, 0.010)
     0.6870
     """
-    _in_range(flow, nq)
-    m = _exponent(flow, nq, 0.1)
-    return float(1.0 - 0.095 * (1.0 / flow) ** m - 0.3 * (0.35 - math.log10(nq / 23.0)) ** 2 * (1.0 / flow) ** 0.05)
+    m = _exponent(0.1, nq, flow)
+    return (
+        1.0 - 0.095 * math.pow(1.0 / flow, m) - 0.3 * (0.35 - math.log10(nq / 23.0)) ** 2 * math.pow(1.0 / flow, 0.05)
+    )
 
 
-def hydraulic_efficiency(nq: float, flow: float) -> float:
-    """Hydraulic efficiency of a single-stage pump.
+def guelich_hydraulic(nq: float, flow: float) -> float:
+    """Hydraulic efficiency of a pump.
+
+    Parameters
+    ----------
+    nq : float
+        Specific speed per suction eye. [1/min, m³/s, m per stage]
+    flow : float
+        Best efficiency flow, total. [m³/s]
+
+    Returns
+    -------
+    float
+        Hydraulic efficiency at best efficiency point. [fraction]
+
+    Raises
+    ------
+    OutOfRange
+        Outside the range below.
 
     Notes
     -----
-    η_h = 1 - 0.055 (1/Q)^m - 0.2 [0.26 - log10(nq/25)]² (1/Q)^0.1, with 0.08 in m.
-    Valid for: 0.005 m³/s and more, nq 7 to 100.
-    Source: Gülich, Centrifugal Pumps, Table 3.9.
+    η_h = 1 − 0.055 (1/Q)^m − 0.2 [0.26 − log₁₀(nq/25)]² (1/Q)^0.1, m = 0.08 a (1/Q)^0.15 (45/nq)^0.06;
+    a = 1 up to 1 m³/s, 0.5 above.
+    Source: Gülich, Centrifugal Pumps, Table 3.9
+    Valid for: from 0.005 m³/s (18 m³/h), nq 7 to 100
     Mark: crossed
 
     Examples
     --------
-    >>> hydraulic_efficiency(20.0, 0.010)
+    >>> guelich_hydraulic(20.0, 0.010)
     0.8406
     """
-    _in_range(flow, nq)
-    m = _exponent(flow, nq, 0.08)
-    return float(1.0 - 0.055 * (1.0 / flow) ** m - 0.2 * (0.26 - math.log10(nq / 25.0)) ** 2 * (1.0 / flow) ** 0.1)
+    m = _exponent(0.08, nq, flow)
+    return 1.0 - 0.055 * math.pow(1.0 / flow, m) - 0.2 * (0.26 - math.log10(nq / 25.0)) ** 2 * math.pow(1.0 / flow, 0.1)
 
 
-def multistage_efficiency(nq: float, flow: float) -> float:
-    """Best efficiency of a multistage pump.
+def guelich_multistage(nq: float, flow: float) -> float:
+    """Efficiency of a multistage pump.
+
+    Parameters
+    ----------
+    nq : float
+        Specific speed per suction eye. [1/min, m³/s, m per stage]
+    flow : float
+        Best efficiency flow, total. [m³/s]
+
+    Returns
+    -------
+    float
+        Efficiency at best efficiency point. [fraction]
+
+    Raises
+    ------
+    OutOfRange
+        Outside the range below.
 
     Notes
     -----
-    η = 1 - 0.116 (1/Q)^m - 0.4 [0.26 - log10(nq/25)]², with 0.08 in m.
-    Valid for: 0.005 m³/s and more, nq 7 to 100.
-    Source: Gülich, Centrifugal Pumps, Table 3.9 (from memory).
+    η = 1 − 0.116 (1/Q)^m − 0.4 [0.26 − log₁₀(nq/25)]², m = 0.08 a (1/Q)^0.15 (45/nq)^0.06;
+    a = 1 up to 1 m³/s, 0.5 above.
+    Source: Gülich, Centrifugal Pumps, Table 3.9
+    Valid for: from 0.005 m³/s (18 m³/h), nq 7 to 100
     Mark: memory
 
     Examples
     --------
-    >>> multistage_efficiency(20.0, 0.010)
+    >>> guelich_multistage(20.0, 0.010)
     0.6981
     """
-    _in_range(flow, nq)
-    m = _exponent(flow, nq, 0.08)
-    return float(1.0 - 0.116 * (1.0 / flow) ** m - 0.4 * (0.26 - math.log10(nq / 25.0)) ** 2)
+    m = _exponent(0.08, nq, flow)
+    return 1.0 - 0.116 * math.pow(1.0 / flow, m) - 0.4 * (0.26 - math.log10(nq / 25.0)) ** 2

@@ -58,6 +58,10 @@ def turns(values: Floats, tolerance: float = 0.0) -> int:
     return count
 
 
+SMALL_TURN = 0.003
+"""Rise or fall over the largest value that counts as no turn. Source: common practice, no source."""
+
+
 def turns_allowed(values: Floats, column: Column) -> int:
     """Turns the points show; one at least for efficiency, whose maximum may lie between two points."""
     return max(turns(values), 1 if column == "efficiency" else 0)
@@ -78,13 +82,14 @@ def shapes_allowed(fits: Candidates) -> list[bool]:
     Notes
     -----
     A rise or fall within a full digit is not seen, since two printed figures may differ by that much where the
-    true ones are equal. Source: common practice, no source.
+    true ones are equal; nor is one within 0.3 % of the largest value, however many digits are printed, since honest
+    readings scatter by that much. Source: common practice, no source.
     """
     allowed = turns_allowed(fits.value, fits.column)
     curves = grid_powers(fits.coefficients.shape[0]) @ fits.coefficients
     rises = np.diff(curves, axis=0) > 0.0
     bare = np.count_nonzero(rises[1:] != rises[:-1], axis=0).tolist()
-    digit = 2.0 * float(fits.value_half_digit.max())
+    digit = max(2.0 * float(fits.value_half_digit.max()), SMALL_TURN * float(np.abs(fits.value).max()))
     return [count <= allowed or turns(curves[:, k], digit) <= allowed for k, count in enumerate(bare)]
 
 

@@ -8,8 +8,8 @@ from bidcheck.curve import Fit, Points
 from bidcheck.fit.degree import grid_powers, turns, turns_allowed
 
 FEW_POINTS = 5
-LARGE_RESIDUAL = 0.02
-NOISE_FACTOR = 2.0
+LARGE_RESIDUAL = 0.04
+NOISE_FACTOR = 3.0
 """Points up to which a fit is in doubt, residual over range from which it is, and multiple of the scatter from which
 a difference counts; common practice, no source."""
 
@@ -60,7 +60,7 @@ def guard(points: Points, fit: Fit, flow: float) -> Fit:
     -------
     Fit
         With `guard_flow` and `guard_difference` (interpolation less fit) filled where the fit is in doubt and the
-        difference exceeds twice the scatter of the points, rounding included, or 2 % of their range where the
+        difference exceeds three times the scatter of the points, rounding included, or 4 % of their range where the
         scatter itself is larger; else the fit as it was.
 
     Notes

@@ -1,9 +1,21 @@
-"""Specific speed and suction specific speed."""
+"""Specific speed, type number and suction specific speed."""
 
 import math
 
-from bidcheck.errors import OutOfRange
-from bidcheck.hydraulics.constants import NQ_PER_TYPE_NUMBER, NS_PER_NQ
+from bidcheck.hydraulics.constants import G
+from bidcheck.hydraulics.ranges import require_positive
+
+US_GALLON = 231 * 0.0254**3
+"""US gallon, 231 cubic inches [m³]. Source: definition."""
+
+FOOT = 0.3048
+"""Foot [m]. Source: definition."""
+
+US_PER_METRIC = math.sqrt(60.0 / US_GALLON) / math.pow(1.0 / FOOT, 0.75)
+"""Ns (rpm, US gpm, ft) over nq (1/min, m³/s, m) = √15850.3 / 3.28084^0.75 = 51.645. Derived from the definitions."""
+
+NQ_PER_TYPE_NUMBER = 60.0 / (2.0 * math.pi) * math.pow(G, 0.75)
+"""nq over type number K = 60/(2π) g^0.75 = 52.919. Derived from the definitions."""
 
 
 def specific_speed(speed_rpm: float, flow: float, head_per_stage: float) -> float:
@@ -14,7 +26,7 @@ def specific_speed(speed_rpm: float, flow: float, head_per_stage: float) -> floa
     speed_rpm : float
         Rotational speed. [1/min]
     flow : float
-        Flow at best efficiency; of the pump, or of one suction eye: say which. [m³/s]
+        Flow at best efficiency, total or per suction eye: the basis of the result, to be printed with it. [m³/s]
     head_per_stage : float
         Head of one stage at best efficiency. [m]
 
@@ -31,49 +43,72 @@ def specific_speed(speed_rpm: float, flow: float, head_per_stage: float) -> floa
     Notes
     -----
     nq = n √Q / H^0.75, at best efficiency and maximum diameter.
-    Source: Hydraulic Institute data library, specific speed.
+    Source: Hydraulic Institute data library, specific speed
+    Valid for: any positive figures
     Mark: text
 
     Examples
     --------
-    >>> specific_speed(3550, 0.0402, 100.0)
+    >>> specific_speed(3550, flow=0.0402, head_per_stage=100.0)
     22.508
     """
-    if speed_rpm <= 0 or flow <= 0 or head_per_stage <= 0:
-        raise OutOfRange("specific speed needs positive speed, flow and head")
-    return float(speed_rpm * math.sqrt(flow) / head_per_stage**0.75)
+    require_positive(speed=speed_rpm, flow=flow, head_per_stage=head_per_stage)
+    return speed_rpm * math.sqrt(flow) / math.pow(head_per_stage, 0.75)
 
 
 def specific_speed_us(nq: float) -> float:
-    """US specific speed Ns (rpm, US gpm, ft) of nq.
+    """Specific speed, or suction specific speed, in US units.
+
+    Parameters
+    ----------
+    nq : float
+        Metric figure. [1/min, m³/s, m]
+
+    Returns
+    -------
+    float
+        The same in rpm, US gpm, ft.
 
     Notes
     -----
-    Ns = 51.645 nq.
-    Source: derived from the units.
+    1 m³/s = 60/(231·0.0254³) = 15 850.3 US gpm and 1 m = 1/0.3048 = 3.28084 ft, so that
+    Ns = √15850.3/3.28084^0.75 nq = 51.645 nq.
+    Source: definitions of the US gallon (231 cubic inches) and of the foot (0.3048 m)
+    Valid for: any figure
     Mark: derived
 
     Examples
     --------
-    >>> specific_speed_us(22.508)
-    1162.4
+    >>> specific_speed_us(20.0)
+    1032.9
     """
-    return NS_PER_NQ * nq
+    return US_PER_METRIC * nq
 
 
 def type_number(nq: float) -> float:
-    """Type number K of nq.
+    """Type number K, specific speed without dimension.
+
+    Parameters
+    ----------
+    nq : float
+        Specific speed per suction eye. [1/min, m³/s, m]
+
+    Returns
+    -------
+    float
+        K, also written Ω_s.
 
     Notes
     -----
-    K = nq / 52.919.
-    Source: ISO 9906:2012, definition of the type number; derived.
+    K = ω √Q / (g H)^0.75 = nq/52.919.
+    Source: ISO 9906:2012, type number K
+    Valid for: any figure
     Mark: derived
 
     Examples
     --------
     >>> type_number(52.919)
-    1.0
+    1.0000
     """
     return nq / NQ_PER_TYPE_NUMBER
 
@@ -86,14 +121,14 @@ def suction_specific_speed(speed_rpm: float, flow_per_eye: float, npsh3: float) 
     speed_rpm : float
         Rotational speed. [1/min]
     flow_per_eye : float
-        Flow at best efficiency through one suction eye. [m³/s]
+        Flow of one suction eye at best efficiency, maximum diameter. [m³/s]
     npsh3 : float
-        NPSH3 there, at maximum diameter. [m]
+        NPSH3 at that flow. [m]
 
     Returns
     -------
     float
-        In 1/min, m³/s, m; times 51.645 in US units.
+        Nss in 1/min, m³/s, m; `specific_speed_us` gives it in US units.
 
     Raises
     ------
@@ -102,15 +137,15 @@ def suction_specific_speed(speed_rpm: float, flow_per_eye: float, npsh3: float) 
 
     Notes
     -----
-    Nss = n √Q / NPSH3^0.75.
-    Source: Hydraulic Institute data library, suction specific speed.
+    Nss = n √Q_eye / NPSH3^0.75.
+    Source: Hydraulic Institute data library, suction specific speed
+    Valid for: any positive figures
     Mark: text
 
     Examples
     --------
-    >>> suction_specific_speed(2950, 110 / 3600, 3.0)
+    >>> suction_specific_speed(2950, flow_per_eye=110 / 3600, npsh3=3.0)
     226.2
     """
-    if speed_rpm <= 0 or flow_per_eye <= 0 or npsh3 <= 0:
-        raise OutOfRange("suction specific speed needs positive speed, flow and NPSH3")
-    return float(speed_rpm * math.sqrt(flow_per_eye) / npsh3**0.75)
+    require_positive(speed=speed_rpm, flow_per_eye=flow_per_eye, npsh3=npsh3)
+    return speed_rpm * math.sqrt(flow_per_eye) / math.pow(npsh3, 0.75)

@@ -4,10 +4,9 @@ from collections.abc import Callable, Sequence
 from dataclasses import dataclass
 from typing import Any, Literal
 
+from bidcheck.arrangement import ARRANGEMENTS, Arrangement
 from bidcheck.bid import (
-    ARRANGEMENTS,
     Adder,
-    Arrangement,
     Bid,
     Casing,
     Claims,

@@ -89,8 +89,18 @@ def read_overrides(table: Table, base: Limits) -> Limits:
         name: limit
         for name, (kind, _) in limit_names().items()
         if (limit := _read_limit(table, name, kind, shipped=False)) is not None
+        and _same_side(table, limit, getattr(base, name))
     }
     return replace(base, **own)
+
+
+def _same_side(table: Table, limit: Limit, base: Limit) -> bool:
+    """Whether a limit bounds from a side that its check looks at; a problem is noted where it does not."""
+    for side, other in (("at_least", "at_most"), ("at_most", "at_least")):
+        if getattr(limit, side) is not None and getattr(base, side) is None:
+            table.problem(limit.name, f"has {side}, but this limit bounds from the other side; write {other}")
+            return False
+    return True
 
 
 def _read_limit(parent: Table, name: str, kind: Kind, *, shipped: bool) -> Limit | None:

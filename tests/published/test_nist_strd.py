@@ -102,6 +102,7 @@ X = np.arange(21.0)
 SUM = sum(X**k for k in range(6))
 
 
+# source: NIST StRD, Wampler1 to Wampler5, certified estimates
 @pytest.mark.parametrize(
     ("y", "certified", "floor"),
     [
@@ -121,11 +122,13 @@ def test_wampler(y, certified, floor):
     assert polynomial_digits(X, y, certified) >= floor
 
 
+# source: NIST StRD, Wampler3 to 5, certified standard deviations of the estimates
 def test_wampler_standard_errors_in_powers_of_x():
     solution = solve(X[:, None] ** np.arange(6), SUM + np.array(DISTURBANCE))
     assert correct_digits(solution.standard_errors, WAMPLER3_ERRORS) >= 12.0
 
 
+# source: NIST StRD, Longley, certified estimates
 def test_longley():
     design = np.column_stack([np.ones(len(LONGLEY)), LONGLEY[:, 1:]])
     solution = solve(design, LONGLEY[:, 0])
@@ -133,6 +136,7 @@ def test_longley():
     assert correct_digits(solution.standard_errors, LONGLEY_ERRORS) >= 10.5
 
 
+# source: NIST StRD, Filip, certified estimates and residual standard deviation
 def test_filip():
     x, y = FILIP[:, 1], FILIP[:, 0]
     assert len(x) == 82

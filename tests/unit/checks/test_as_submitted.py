@@ -78,7 +78,8 @@ def test_balance_without_either_is_no_data():
 
 
 @pytest.mark.parametrize(
-    ("deviation", "verdict"), [(0.012, Verdict.REMARK), (-0.03, Verdict.REMARK), (-0.0301, Verdict.QUERY), (0.0301, Verdict.QUERY)]
+    ("deviation", "verdict"),
+    [(0.012, Verdict.REMARK), (-0.03, Verdict.REMARK), (-0.0301, Verdict.QUERY), (0.0301, Verdict.QUERY)],
 )
 def test_odd_points_are_shown_with_what_would_fit(deviation, verdict):
     case = sound_case()

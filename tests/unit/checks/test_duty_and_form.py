@@ -91,3 +91,11 @@ def test_specific_speed_without_best_efficiency_is_no_data():
     case = sound_case()
     case = replace(case, estimates=replace(case.estimates, nq=None))
     assert judge(specific_speed_window.CHECK, case)["best efficiency"].verdict is Verdict.NO_DATA
+
+
+@pytest.mark.parametrize("running", [1, 2])
+def test_a_mandatory_limit_missed_is_a_fail_whatever_the_step(running):
+    case = sound_case(drooping(72.0), duty=duty(running=running))
+    own = replace(case.inquiry.limits.shutoff_droop, mandatory=True, mark="purchaser")
+    case = replace(case, inquiry=replace(case.inquiry, limits=replace(case.inquiry.limits, shutoff_droop=own)))
+    assert judge(curve_stability.CHECK, case)["towards shutoff"].verdict is Verdict.FAIL

@@ -69,6 +69,18 @@ def test_process_margin_is_raised_only_outside_the_preferred_region():
 
 
 @pytest.mark.parametrize(
+    ("npsh3", "npsha", "verdict"),
+    [(4.0, 5.5, Verdict.PASS), (4.0, 5.4, Verdict.FAIL), (8.0, 9.5, Verdict.QUERY), (8.0, 9.4, Verdict.FAIL)],
+)
+def test_a_margin_the_purchaser_sets_holds_at_any_suction_specific_speed(npsh3, npsha, verdict):
+    case = at_npsh(npsh3, npsha, 9000.0)
+    own = replace(case.inquiry.limits.npsh_margin, at_least=1.5, mark="purchaser", mandatory=True)
+    limits = replace(case.inquiry.limits, npsh_margin=own)
+    finding = judge(npsh_margin.CHECK, replace(case, inquiry=replace(case.inquiry, limits=limits)))["rated"]
+    assert finding.verdict is verdict
+
+
+@pytest.mark.parametrize(
     ("set_name", "nss", "inducer", "verdict"),
     [
         ("general-water", 11000.0, False, Verdict.PASS),

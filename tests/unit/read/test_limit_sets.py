@@ -56,3 +56,12 @@ def test_override_refused(name, limit, message):
     with pytest.raises(InputError) as caught:
         limits_with(limit_set("process"), {name: limit})
     assert message in str(caught.value)
+
+
+def test_a_limit_from_the_wrong_side_is_refused():
+    own = {"npsh_margin": {"at_most": "1.0 m", "origin": "spec"}, "odd_point": {"at_least": "1 %", "origin": "spec"}}
+    with pytest.raises(InputError) as error:
+        limits_with(limit_set("process"), own)
+    assert len(error.value.problems) == 2
+    assert "write at_least" in str(error.value)
+    assert "write at_most" in str(error.value)

@@ -1,4 +1,3 @@
-import os
 from pathlib import Path
 
 from bidcheck.limits import limit_names
@@ -7,13 +6,9 @@ from bidcheck.read.spelling_tables import files_tables, with_tables
 DOCUMENT = Path(__file__).parents[3] / "docs" / "files.md"
 
 
-def test_document_is_current():
-    """Rewrite with BIDCHECK_REWRITE=1 and review the difference."""
+def test_document_is_current(golden):
     text = DOCUMENT.read_text(encoding="utf-8")
-    if os.environ.get("BIDCHECK_REWRITE"):
-        DOCUMENT.write_text(with_tables(text), encoding="utf-8")
-        text = DOCUMENT.read_text(encoding="utf-8")
-    assert text == with_tables(text)
+    golden("docs/files.md", with_tables(text))
     for table in files_tables().values():
         assert table in text
 
