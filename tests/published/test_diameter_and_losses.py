@@ -45,8 +45,11 @@ def test_shutoff_head_over_best_efficiency_head():
 # source: Cordier (1953), readings of the line as quoted in the literature: type number, specific diameter
 @pytest.mark.parametrize(
     ("number", "printed"),
-    [(0.3, "9.66"), (0.4, "6.98"), (0.5, "5.65"), (0.7, "4.05"), (1.0, "3.01"), (2.0, "1.89"), (5.0, "1.26")],
-)
+    [
+        (0.3, "9.66"), (0.4, "6.98"), (0.5, "5.65"), (0.6, "4.70"), (0.7, "4.05"), (0.8, "3.57"),
+        (0.9, "3.25"), (1.0, "3.01"), (2.0, "1.89"), (3.0, "1.57"), (4.0, "1.40"), (5.0, "1.26"),
+    ],
+)  # fmt: skip
 def test_cordier_line(number, printed):
     assert_as_printed(cordier_specific_diameter(number), printed)
 
@@ -97,5 +100,4 @@ def test_window_at_five_hundred_gallons():
     window = specific_speed_window(500 * GPM)
     for ns in (600, 1000, 2000, 3000):
         assert window.low <= ns / 51.645 <= window.high
-    assert 0.5 * window.low < window.low
-    assert window.low > 300 / 51.645
+    assert not window.low <= 300 / 51.645 <= window.high
