@@ -188,3 +188,13 @@ def test_ceiling_never_forbids_what_the_chart_calls_attainable(nq, flow, share_o
     diameter = diameter_for_head(head, speed, share_of_optimum * optimum_head_coefficient(nq))
     found = estimate(nq=nq, flow=flow * M3H, head_per_stage=head, speed_rpm=speed, diameter=diameter)
     assert found.ceiling > found.attainable
+
+
+@pytest.mark.parametrize(("nq", "flow"), [(30.0, 100.0), (70.0, 300.0), (60.0, 990.0), (20.0, 990.0)])
+def test_place_in_the_market_is_that_of_the_survey_where_the_expected_value_fades(nq, flow):
+    from bidcheck.estimates.market_surface import ESOB_1450, market_share_below
+
+    found = estimate(nq=nq, flow=flow * M3H)
+    for efficiency in (0.70, 0.80, 0.85):
+        by_survey = market_share_below(ESOB_1450, efficiency, nq, flow * M3H)
+        assert found.market_share_below(efficiency) == pytest.approx(by_survey, abs=1e-9)
