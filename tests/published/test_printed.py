@@ -7,7 +7,8 @@ from tests.published.printed import assert_as_printed
 
 # source: definition of rounding to the last printed digit: 73.94 stands for 73.935 to 73.945, 235 for 234.5 to 235.5
 @pytest.mark.parametrize(
-    ("value", "printed"), [(73.945, "73.94"), (73.935, "73.94"), (234.5, "235"), (-0.0049, "0.00"), (0.00353, "3.53e-3")]
+    ("value", "printed"),
+    [(73.945, "73.94"), (73.935, "73.94"), (234.5, "235"), (-0.0049, "0.00"), (0.00353, "3.53e-3")],
 )
 def test_just_inside(value, printed):
     assert_as_printed(value, printed)
