@@ -68,6 +68,25 @@ def test_regime_of_disc_friction():
     assert moment_coefficient(1e3, 0.02) == pytest.approx(2 * math.pi / (0.02 * 1e3))
 
 
+# source: Daily and Nece (1960), formula of each regime worked by hand: gap over radius, Re, C_M; regimes I, I, II, II,
+# source: III, III, IV, IV, where each is the largest of the four
+@pytest.mark.parametrize(
+    ("gap", "reynolds", "printed"),
+    [
+        (0.01, 1e3, "0.6283"),
+        (0.02, 1e3, "0.3142"),
+        (0.2, 1e4, "0.03150"),
+        (0.1, 2e4, "0.02078"),
+        (0.01, 1e6, "0.005450"),
+        (0.01, 1e5, "0.009692"),
+        (0.1, 1e7, "0.003226"),
+        (0.05, 1e6, "0.004770"),
+    ],
+)
+def test_moment_coefficient_of_every_regime(gap, reynolds, printed):
+    assert_as_printed(moment_coefficient(reynolds, gap), printed)
+
+
 # source: Gülich, Centrifugal Pumps, Table 3.5, by hand: 4.1/20^1.6 and 0.15/60^0.6
 def test_leakage():
     assert_as_printed(leakage_share(20.0), "0.0340")
