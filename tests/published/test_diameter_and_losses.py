@@ -6,11 +6,13 @@ import pytest
 
 from bidcheck.estimates.disc_friction import disc_friction_share, moment_coefficient
 from bidcheck.estimates.head_coefficient import (
+    cordier_ratio,
     cordier_specific_diameter,
     diameter_for_head,
     head_coefficient,
     optimum_head_coefficient,
     shutoff_head_coefficient,
+    specific_diameter,
 )
 from bidcheck.estimates.loss_ceiling import leakage_share
 from bidcheck.estimates.npsh3_expected import expected_npsh3
@@ -38,8 +40,17 @@ def test_diameter_of_the_optimum_head_coefficient(flow, head, speed, printed):
 # source: Institute's sketch of curve shapes has at 1.15 for nq 20 and 1.41 for nq 60, "approximate", here to 4 %
 def test_shutoff_head_over_best_efficiency_head():
     assert_as_printed(shutoff_head_coefficient(7) / optimum_head_coefficient(7) / math.exp(0.47 * 0.07), "1.083")
+    assert_as_printed(shutoff_head_coefficient(60) / optimum_head_coefficient(60) / math.exp(0.47 * 0.60), "1.083")
+    assert_as_printed(shutoff_head_coefficient(60), "1.094")
     for nq, sketch in ((20, 1.15), (60, 1.41)):
         assert shutoff_head_coefficient(nq) / optimum_head_coefficient(nq) == pytest.approx(sketch, rel=0.04)
+
+
+# source: Cordier (1953), definition of the specific diameter and straight lines in logarithms between the readings,
+# source: worked by hand: 214.4 mm, 55 m, 130 m³/h, 2960 rpm
+def test_specific_diameter_and_its_ratio_to_the_line():
+    assert_as_printed(specific_diameter(0.2144, 55.0, 130 * M3H), "5.437")
+    assert_as_printed(cordier_ratio(0.2144, 55.0, 130 * M3H, 2960.0), "1.013")
 
 
 # source: Cordier (1953), readings of the line as quoted in the literature: type number, specific diameter

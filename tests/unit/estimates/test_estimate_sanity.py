@@ -61,3 +61,18 @@ def test_several_eyes_share_leakage_and_disc_friction():
     single, double = estimate("end suction", 30.0, 1000.0), estimate("double suction", 30.0, 2000.0)
     assert double.ceiling_terms["leakage"] == pytest.approx(single.ceiling_terms["leakage"])
     assert double.ceiling_terms["disc friction"] < single.ceiling_terms["disc friction"]
+
+
+def test_spreads_the_sources_are_shown_with():
+    found = {source.name: source for source in estimate("end suction", 30.0, 100.0).sources}
+    statistics = found["statistics by size and specific speed, single stage"]
+    assert statistics.spread == pytest.approx(0.2 * (1 - statistics.value))
+    survey = next(source for name, source in found.items() if name.startswith("market survey, median"))
+    assert survey.spread == pytest.approx(0.0518, abs=5e-5)
+
+
+def test_losses_of_the_ceiling():
+    terms = estimate("end suction", 20.0, 100.0).ceiling_terms
+    assert terms["hydraulic"] == pytest.approx(0.03)
+    assert terms["mechanical"] == pytest.approx(0.005)
+    assert terms["leakage"] == pytest.approx(0.5 * 4.1 / 20**1.6, rel=1e-6)
