@@ -76,3 +76,18 @@ def test_losses_of_the_ceiling():
     assert terms["hydraulic"] == pytest.approx(0.03)
     assert terms["mechanical"] == pytest.approx(0.005)
     assert terms["leakage"] == pytest.approx(0.5 * 4.1 / 20**1.6, rel=1e-6)
+
+
+def test_the_floor_shown_is_that_of_an_index_of_four_tenths():
+    found = estimate("close coupled", 30.0, 100.0)
+    median, floor = (source.value for source in found.sources if source.name.startswith("market survey"))
+    assert median - floor == pytest.approx(0.2533 * found.sigma, rel=1e-3)
+
+
+@pytest.mark.parametrize(("stages", "form"), [(1, "single stage"), (2, "multistage")])
+def test_two_stages_call_for_the_multistage_form(stages, form):
+    found = estimate_efficiency(
+        arrangement="vertical turbine", nq=30.0, nq_eye=30.0, flow=0.03, head_per_stage=20.0, speed_rpm=1450.0,
+        stages=stages,
+    )  # fmt: skip
+    assert [source.name for source in found.sources if source.name.endswith(form)]
