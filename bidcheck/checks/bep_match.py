@@ -9,7 +9,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, text, whole_share
-from bidcheck.checks.request import asked
+from bidcheck.checks.request import asked, asked_for_curve
 from bidcheck.checks.verdicts import missed
 from bidcheck.curve import BestEfficiency
 from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
@@ -32,7 +32,10 @@ def run(case: Case) -> Iterator[Measured]:
         else:
             yield Measured(subject="rated", holds=compared, evidence=evidence)
         return
-    beyond = case.pumped.bep_beyond if case.pumped is not None else None
+    if case.pumped is None:
+        yield asked_for_curve(case, "rated")
+        return
+    beyond = case.pumped.bep_beyond
     if beyond is None:
         yield asked("rated", "best efficiency")
         return

@@ -26,7 +26,7 @@ def largest_flow(case: Case) -> float:
 def run(case: Case) -> Iterator[Measured]:
     """Count the points of each quantity and see how far they reach."""
     if case.fits is None or case.curve is None:
-        yield asked("head", "head curve")
+        yield asked("head", "head curve at the offered diameter")
         return
     limits = case.inquiry.limits
     for column in COLUMNS:

@@ -11,7 +11,7 @@ import numpy as np
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, head, share
-from bidcheck.checks.request import asked
+from bidcheck.checks.request import asked, asked_for_curve
 from bidcheck.checks.verdicts import missed
 from bidcheck.curve import Fit, Points
 from bidcheck.finding import Check, Measured, Verdict, Wording
@@ -23,7 +23,7 @@ def run(case: Case) -> Iterator[Measured]:
     fit = case.pumped.head if case.pumped is not None else None
     points = case.curve.head if case.curve is not None else None
     if fit is None or points is None:
-        yield asked("towards shutoff", "head curve")
+        yield asked_for_curve(case, "towards shutoff")
         return
     if not fit.covers(0.0):
         yield asked("towards shutoff", "shutoff head")

@@ -7,7 +7,7 @@ rest is asked for without holding the bid up. What is missing is never taken as 
 from collections.abc import Iterator
 
 from bidcheck.case import Case
-from bidcheck.checks.request import asked
+from bidcheck.checks.request import Item, asked, asked_for_curve
 from bidcheck.finding import Check, Measured, Verdict, Wording
 
 
@@ -15,11 +15,16 @@ def run(case: Case) -> Iterator[Measured]:
     """Go through what a bid ought to give."""
     at, bid = case.at_duty, case.bid
     yield from _need("head", "head at rated flow", at.head is not None, decisive=True)
-    yield from _need("head curve", "head curve", case.fits is not None and case.fits.head is not None, decisive=True)
+    if case.pumped is None or case.pumped.head is None:
+        yield asked_for_curve(case, "head curve", decisive=True)
+    else:
+        yield Measured(subject="head curve", verdict=Verdict.PASS)
     efficiency_or_power = at.efficiency is not None or at.power is not None
     yield from _need("efficiency or power", "efficiency or power", efficiency_or_power, decisive=True)
     yield from _need("NPSH3", "NPSH3 at rated flow", at.npsh3 is not None, decisive=True)
     yield from _need("driver rating", "driver rating", bid.driver.rating is not None, decisive=True)
+    if any(curve.power_at == "motor input" for curve in bid.curves):
+        yield from _need("motor efficiency", "motor efficiency", bid.driver.efficiency is not None)
     yield from _need("minimum flow", "minimum continuous flow", bid.claims.min_continuous_flow is not None)
     diameters = bid.impeller_rated is not None and bid.impeller_max is not None
     yield from _need("impeller diameters", "impeller diameters", diameters)
@@ -27,7 +32,7 @@ def run(case: Case) -> Iterator[Measured]:
     yield from _need("casing rating", "casing rating", bid.casing.max_pressure is not None)
 
 
-def _need(subject: str, request: str, given: bool, *, decisive: bool = False) -> Iterator[Measured]:
+def _need(subject: str, request: Item, given: bool, *, decisive: bool = False) -> Iterator[Measured]:
     """One item: given, or asked for."""
     if given:
         yield Measured(subject=subject, verdict=Verdict.PASS)

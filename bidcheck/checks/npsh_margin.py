@@ -9,11 +9,11 @@ from collections.abc import Iterator
 
 from bidcheck.case import AtFlow, Case
 from bidcheck.checks import evidence as ev
-from bidcheck.checks.request import asked, ours
+from bidcheck.checks.request import Item, asked, ours
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import Comparison, Limit, Limits, within
 
-REQUESTED = {"rated": "NPSH3 at rated flow", "largest flow": "NPSH3 at the largest flow"}
+REQUESTED: dict[str, Item] = {"rated": "NPSH3 at rated flow", "largest flow": "NPSH3 at the largest flow"}
 
 
 def run(case: Case) -> Iterator[Measured]:

@@ -23,7 +23,7 @@ AS_EVIDENCE = {"head": head, "efficiency": share, "power": power, "npsh3": npsh}
 def run(case: Case) -> Iterator[Measured]:
     """Report every odd point and every fit in doubt."""
     if case.fits is None or case.curve is None:
-        yield asked("all curves", "head curve")
+        yield asked("all curves", "head curve at the offered diameter")
         return
     for odd in case.fits.odd_points:
         yield _odd(case, case.curve.file, odd)

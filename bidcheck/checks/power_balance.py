@@ -38,7 +38,7 @@ def run(case: Case) -> Iterator[Measured]:
     """Compare the efficiency that follows from flow, head and power with the one stated."""
     curve = case.curve
     if curve is None or curve.head is None:
-        yield asked("all points", "head curve")
+        yield asked("all points", "head curve at the offered diameter")
         return
     if curve.efficiency is None or curve.power is None:
         if curve.efficiency is None and curve.power is None:

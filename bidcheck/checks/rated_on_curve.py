@@ -29,6 +29,8 @@ from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import within
 from bidcheck.quantity import Stated
 
+SPEED_EXPONENT: dict[Column, int] = {"head": 2, "efficiency": 0, "power": 3}
+"""How each quantity goes with speed. Source: affinity laws."""
 MORE_IS_BETTER: dict[Column, bool] = {"head": True, "efficiency": True, "power": False, "npsh3": False}
 
 
@@ -65,6 +67,9 @@ def _compared(
     compared = within(abs(gap - 1.0), limit, slack=slack)
     if compared.holds:
         return Measured(subject=subject, holds=compared, evidence=evidence)
+    drawn = _at_speed_drawn(case, column, fit, flow)
+    if drawn is not None and within(abs(claim.value / drawn - 1.0), limit, slack=slack).holds:
+        return Measured(subject=subject, verdict=Verdict.REMARK, limit=limit, evidence=evidence, wording="speed drawn")
     mistakes = _mistakes(case, column, gap)
     if mistakes:
         evidence["mistakes"] = text(in_words(mistakes))
@@ -77,6 +82,19 @@ def _compared(
         evidence=evidence,
         wording="careful" if careful else "better",
     )
+
+
+def _at_speed_drawn(case: Case, column: Column, fit: Fit, flow: float) -> float | None:
+    """The figure at the speed the curve was drawn for, where that is not the offered speed; None if it cannot be told.
+
+    Catalogue curves drawn at 1450 or 2900 1/min are honest; claims read off them belong to that speed.
+    """
+    speeds = {curve.speed_rpm for curve in case.bid.curves if case.curve is not None and curve.file == case.curve.file}
+    ratio = case.bid.speed_rpm / speeds.pop() if len(speeds) == 1 else 1.0
+    if ratio == 1.0 or column == "npsh3" or not fit.covers(flow * ratio):
+        return None
+    drawn = fit.at(flow * ratio) / ratio ** SPEED_EXPONENT[column]
+    return drawn if drawn > 0 else None
 
 
 def _doubt(fit: Fit, flow: float) -> float:
@@ -121,6 +139,10 @@ CHECK = Check(
         ),
         "careful": Wording(
             "Claimed {quantity} {claim} is more careful than the bidder's own curve, {curve}: off by {gap}."
+        ),
+        "speed drawn": Wording(
+            "Claimed {quantity} {claim} belongs to the speed the curve was drawn for; at the offered speed the curve"
+            " gives {curve}."
         ),
         "explained": Wording(
             "Claimed {quantity} {claim} is off the bidder's own curve, {curve}, by {gap}. One mistake would close the"

@@ -1,10 +1,38 @@
 """Missing figures: what is asked for, in one wording wherever it is missed."""
 
+from typing import TYPE_CHECKING, Literal
+
 from bidcheck.checks.evidence import text
 from bidcheck.finding import Measured, Verdict, Wording
 
-REQUESTS: dict[str, str] = {
-    "head curve": (
+if TYPE_CHECKING:
+    from bidcheck.case import Case
+
+Item = Literal[
+    "head curve at the offered diameter",
+    "efficiency or power",
+    "efficiency",
+    "best efficiency",
+    "NPSH3 at rated flow",
+    "NPSH3 at best efficiency",
+    "NPSH3 at the largest flow",
+    "shutoff head",
+    "driver rating",
+    "minimum continuous flow",
+    "largest allowable flow",
+    "impeller diameters",
+    "guarantee",
+    "casing rating",
+    "head at rated flow",
+    "curve for the liquid as pumped",
+    "motor efficiency",
+    "water curve",
+    "flow, head, efficiency and power together",
+]
+"""What a bid can be asked to supply."""
+
+REQUESTS: dict[Item, str] = {
+    "head curve at the offered diameter": (
         "Please send head against flow, from shutoff to the end of the curve, at the offered diameter and speed."
     ),
     "efficiency or power": "Please send efficiency or shaft power against flow at the offered diameter and speed.",
@@ -27,6 +55,9 @@ REQUESTS: dict[str, str] = {
     "guarantee": "Please state the acceptance standard and grade, and whether power or efficiency is guaranteed.",
     "casing rating": "Please state the largest allowable casing pressure.",
     "head at rated flow": "Please state the head at rated flow at the offered diameter and speed.",
+    "curve for the liquid as pumped": "Please send head, efficiency, shaft power and NPSH3 for the liquid, density and"
+    " viscosity of the inquiry, and say how they were corrected.",
+    "motor efficiency": "Power is stated as motor input: please state the motor's efficiency, or the shaft power.",
     "water curve": "Please send the curve for clean cold water as well.",
     "flow, head, efficiency and power together": "Please send head, efficiency and shaft power at the same flows.",
 }
@@ -37,10 +68,16 @@ OURS = Wording("Not checked: the inquiry gives no {missing}.")
 NOT_APPLICABLE = Wording("Not applicable: {reason}.")
 
 
-def asked(subject: str, missing: str, *, decisive: bool = False) -> Measured:
+def asked(subject: str, missing: Item, *, decisive: bool = False) -> Measured:
     """No data, with the request to the bidder to supply `missing`, a key of `REQUESTS`."""
     evidence = {"missing": text(missing), "request": text(REQUESTS[missing])}
     return Measured(subject=subject, verdict=Verdict.NO_DATA, evidence=evidence, wording="missing", decisive=decisive)
+
+
+def asked_for_curve(case: "Case", subject: str, *, decisive: bool = False) -> Measured:
+    """No data because there is no curve of the offered diameter, or none for the liquid as pumped."""
+    missing: Item = "head curve at the offered diameter" if case.fits is None else "curve for the liquid as pumped"
+    return asked(subject, missing, decisive=decisive)
 
 
 def ours(subject: str, missing: str) -> Measured:

@@ -8,7 +8,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, specific_speed, text
-from bidcheck.checks.request import asked, not_applicable
+from bidcheck.checks.request import Item, asked, not_applicable
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates.window import specific_speed_window
 from bidcheck.finding import Check, Measured, Verdict, Wording
@@ -20,7 +20,7 @@ def run(case: Case) -> Iterator[Measured]:
     """Compare specific speed at best efficiency with the window of its flow."""
     nq, bep = case.estimates.nq, case.max_fits.bep if case.max_fits is not None else None
     if nq is None or bep is None:
-        missing = "water curve" if case.water and case.curve is not None else "best efficiency"
+        missing: Item = "water curve" if case.water and case.curve is not None else "best efficiency"
         yield asked("best efficiency", missing)
         return
     try:
