@@ -147,3 +147,12 @@ def test_window_is_held_beyond_its_readings_and_says_so():
     assert not specific_speed_window(18 * M3H).held
     assert 13 < specific_speed_window(1000 * M3H).low < 19
     assert refused(specific_speed_window, 0.0)
+
+
+@pytest.mark.parametrize(("flow", "low"), [(18, 10), (180, 11), (360, 13), (720, 13), (1800, 19), (18000, 29)])
+def test_window_passes_through_its_readings(flow, low):
+    assert specific_speed_window(flow * M3H).low == pytest.approx(low, rel=1e-9)
+    if 18 < flow < 18000:
+        before, after = (specific_speed_window(share * flow * M3H).low for share in (0.999, 1.001))
+        assert before <= low * (1 + 1e-9) <= after * (1 + 2e-9)
+        assert after - before < 0.03
