@@ -90,7 +90,7 @@ def test_shutoff_is_to_be_left_out():
 @pytest.mark.parametrize(
     ("viscosity", "flow", "head", "speed"),
     [
-        (1.0e-6, 3.0, 20.0, 1450),
+        (1.76e-6, 3.0, 20.0, 1450),
         (100e-6, 3.0, 20.0, 1450),
         (100e-6, 100.0, 6.0, 960),
         (100e-6, 100.0, 20.0, 59.99 / (100 / 3600) ** 0.5 * 20**0.75),
@@ -103,7 +103,6 @@ def test_just_inside_the_method(viscosity, flow, head, speed):
 @pytest.mark.parametrize(
     ("viscosity", "flow", "head", "speed", "words"),
     [
-        (0.99e-6, 3.0, 20.0, 1450, "viscosity"),
         (100e-6, 2.99, 20.0, 1450, "flow"),
         (100e-6, 100.0, 5.99, 960, "head"),
         (100e-6, 100.0, 20.0, 60.01 / (100 / 3600) ** 0.5 * 20**0.75, "specific speed"),
@@ -123,3 +122,10 @@ def test_parameter_just_below_and_at_its_end():
 
 def test_head_factor_at_half_flow():
     assert viscous_head_factor(0.9378, np.array([0.5]))[0] == pytest.approx(1 - 0.0622 * 0.5946036, abs=1e-7)
+
+
+@pytest.mark.parametrize("viscosity", [0.36e-6, 1.0e-6, 1.75e-6])
+def test_water_in_a_small_pump_is_not_corrected_for_being_water(viscosity):
+    factors = viscous_factors(viscosity, 3.0 * M3H, 20.0, 1450)
+    assert factors.parameter > 1
+    assert (factors.flow, factors.efficiency) == (1.0, 1.0)
