@@ -6,7 +6,7 @@ from bidcheck.bid import Bid
 from bidcheck.curve import Curve, Fit, Fits, Points
 from bidcheck.errors import OutOfRange
 from bidcheck.fit import fit_curve
-from bidcheck.hydraulics.viscous import viscous_factors, viscous_head_factor, viscous_parameter
+from bidcheck.hydraulics.viscous import needs_correction, viscous_factors, viscous_head_factor, viscous_parameter
 from bidcheck.inquiry import Liquid
 from bidcheck.quantity import Assumption
 
@@ -76,11 +76,12 @@ def at_offered_basis(curve: Curve, bid: Bid, assumptions: list[Assumption]) -> C
 
 
 def viscosity_matters(liquid: Liquid, bid: Bid, fits: Fits) -> bool:
-    """Whether viscosity changes what the pump does: parameter B of ANSI/HI 9.6.7 above 1 at best efficiency."""
+    """Whether viscosity changes what the pump does: B of ANSI/HI 9.6.7 above 1 and no cold water."""
     bep = fits.bep
     if bep is None or bep.head is None or bep.head <= 0:
         return False
-    return viscous_parameter(liquid.viscosity, bep.flow, bep.head / bid.stages, bid.speed_rpm) > 1.0
+    B = viscous_parameter(liquid.viscosity, bep.flow, bep.head / bid.stages, bid.speed_rpm)
+    return needs_correction(liquid.viscosity, B)
 
 
 def as_pumped(curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumptions: list[Assumption]) -> Fits | None:

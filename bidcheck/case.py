@@ -40,6 +40,8 @@ class EfficiencyEstimate:
     sources: tuple[Source, ...]
     market_class: str
     """Class of the market survey used, empty where there is none."""
+    market_median: float | None
+    """Median of the surveyed market at this size and speed; None where the survey does not reach."""
     expected: float | None
     expected_from: str
     """Which source the expected value comes from, in words."""
@@ -62,9 +64,9 @@ class EfficiencyEstimate:
         """Share of the surveyed market with a lower efficiency at this size and speed; None without a class."""
         from math import erf, sqrt
 
-        if self.expected is None or self.sigma is None or not self.market_class:
+        if self.market_median is None or self.sigma is None:
             return None
-        return 0.5 * (1.0 + erf((efficiency - self.expected) / self.sigma / sqrt(2.0)))
+        return 0.5 * (1.0 + erf((efficiency - self.market_median) / self.sigma / sqrt(2.0)))
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)

@@ -141,6 +141,7 @@ def _refused(shape: Shape, reason: str) -> EfficiencyEstimate:
     return EfficiencyEstimate(
         sources=efficiency_sources(shape, expected),
         market_class="",
+        market_median=None,
         expected=None,
         expected_from=f"no expected efficiency: {reason}",
         attainable=None,
@@ -253,6 +254,7 @@ def estimate_efficiency(
     return EfficiencyEstimate(
         sources=efficiency_sources(shape, expected),
         market_class=" and ".join(one.name for one in expected.classes) if surveyed else "",
+        market_median=expected.median,
         expected=expected.value,
         expected_from=expected.origin,
         attainable=attainable,

@@ -9,7 +9,8 @@ from bidcheck.estimates import context, guelich
 from bidcheck.estimates.expected import MULTISTAGE, Expected
 from bidcheck.estimates.market_surface import market_efficiency, nominal_flow
 from bidcheck.estimates.shape import Shape, attainable_of, balance_of, ceiling_of, table_of
-from bidcheck.estimates.us_rule import UsClass, us_minimum_efficiency, us_nominal_speed
+from bidcheck.estimates.us_rule import UsClass, outside_us_scope, us_minimum_efficiency, us_nominal_speed
+from bidcheck.hydraulics.affinity import flow_at_speed, head_at_speed
 
 FLOOR_MEI = 0.40
 """Minimum efficiency index required since 2015. Source: Regulation (EU) No 547/2012, Annex II."""
@@ -77,15 +78,23 @@ def _us_source(shape: Shape) -> list[Source]:
     if us_class is None or (shape.stages > 1 and shape.arrangement not in MULTISTAGE):
         return []
     nominal = us_nominal_speed(shape.speed_rpm)
+    flow = flow_at_speed(shape.flow, shape.speed_rpm, nominal)
+    head = head_at_speed(shape.head_per_stage, shape.speed_rpm, nominal)
+
+    def least() -> float:
+        found = us_minimum_efficiency(us_class, nominal, shape.nq_eye, flow)
+        outside = outside_us_scope(us_class, nq=shape.nq_eye, flow=flow, head=head)
+        if outside:
+            raise OutOfRange(f"the US rule does not reach here: {outside} at {nominal} rpm")
+        return found
+
     return [
         _source(
             f"US minimum ({us_class}, {nominal} rpm)",
-            "25 to 4403 US gpm at 1800 or 3600 rpm, nq 8 to 80",
+            "25 to 4403 US gpm at 1800 or 3600 rpm, nq 8 to 80, to 459 ft",
             "text",
             "10 CFR 431.464 and 431.465; 80 FR 22939",
-            value=lambda: us_minimum_efficiency(
-                us_class, nominal, shape.nq_eye, shape.flow * nominal / shape.speed_rpm
-            ),
+            value=least,
         )
     ]
 

@@ -65,6 +65,8 @@ def test_classes(market_class, c10, c40, sigma, median):
     assert (market_class.c10, market_class.c40) == (c10, c40)
     assert_as_printed(100 * market_class.sigma, sigma)
     assert_as_printed(market_class.c_median, median)
+    assert market_class.nominal_rpm in (1450, 2900)
+    assert market_class.name.endswith(f", {market_class.nominal_rpm:g} rpm")
 
 
 # source: Regulation (EU) No 547/2012, definition of MEI: the share of the market that is worse; benchmark 0.70 lies

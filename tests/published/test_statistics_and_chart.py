@@ -71,6 +71,10 @@ def test_efficiency_by_flow_beside_an_independent_implementation(gpm):
     assert corripio_efficiency(gpm * GPM) == pytest.approx(fluids.Corripio_pump_efficiency(gpm * GPM), abs=1e-5)
 
 
-# source: from memory: Anderson, as printed in the Pump Handbook: at nq 44 and 1 m³/s 0.94 - 0.048
-def test_statistical_comparison():
-    assert_as_printed(anderson_efficiency(44.0, 1.0), "0.892")
+# source: from memory: Anderson, as printed in the Pump Handbook, worked by hand: nq, m³/s
+@pytest.mark.parametrize(
+    ("nq", "flow", "printed"),
+    [(44.0, 1.0, "0.8920"), (20.0, 0.05, "0.7808"), (75.0, 0.5, "0.8645"), (20.0, 1.0, "0.8580")],
+)
+def test_statistical_comparison(nq, flow, printed):
+    assert_as_printed(anderson_efficiency(nq, flow), printed)

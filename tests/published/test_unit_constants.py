@@ -1,17 +1,10 @@
 """Conversion factors against printed ones."""
 
-import math
-
 import pytest
 
 from bidcheck.quantity import Kind
 from bidcheck.units import from_si, to_si
-
-
-def assert_as_printed(value, printed):
-    """Agree to half a unit of the last printed digit."""
-    half = 0.5 * 10.0 ** -len(printed.partition(".")[2])
-    assert math.isclose(value, float(printed), rel_tol=0.0, abs_tol=half * 1.000001)
+from tests.published.printed import assert_as_printed
 
 
 # source: Hydraulic Institute data library, conversion of units: 1 m³/h = 4.402868 US gpm; Ns (US) = 51.645 nq

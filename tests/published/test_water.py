@@ -41,7 +41,16 @@ def test_density_of_the_release():
 # source: 943.106, 917.007 kg/m³, here to the digits both formulations share (they differ by up to 0.021)
 @pytest.mark.parametrize(
     ("celsius", "density"),
-    [(5, "999.9"), (20, "998.2"), (40, "992.2"), (60, "983.2"), (80, "971.8"), (100, "958.35"), (150, "917.0")],
+    [
+        (5, "999.9"),
+        (20, "998.2"),
+        (40, "992.2"),
+        (60, "983.2"),
+        (80, "971.8"),
+        (100, "958.35"),
+        (120, "943.1"),
+        (150, "917.0"),
+    ],
 )
 def test_density_of_water(celsius, density):
     assert_as_printed(water_density(celsius + 273.15), density)

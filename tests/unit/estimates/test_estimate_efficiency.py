@@ -188,3 +188,23 @@ def test_ceiling_never_forbids_what_the_chart_calls_attainable(nq, flow, share_o
     diameter = diameter_for_head(head, speed, share_of_optimum * optimum_head_coefficient(nq))
     found = estimate(nq=nq, flow=flow * M3H, head_per_stage=head, speed_rpm=speed, diameter=diameter)
     assert found.ceiling > found.attainable
+
+
+@pytest.mark.parametrize(("nq", "flow"), [(30.0, 100.0), (70.0, 300.0), (60.0, 990.0), (20.0, 990.0)])
+def test_place_in_the_market_is_that_of_the_survey_where_the_expected_value_fades(nq, flow):
+    from bidcheck.estimates.market_surface import ESOB_1450, market_share_below
+
+    found = estimate(nq=nq, flow=flow * M3H)
+    for efficiency in (0.70, 0.80, 0.85):
+        by_survey = market_share_below(ESOB_1450, efficiency, nq, flow * M3H)
+        assert found.market_share_below(efficiency) == pytest.approx(by_survey, abs=1e-9)
+
+
+@pytest.mark.parametrize(
+    ("feet", "speed", "covered"), [(458.0, 3600.0, True), (460.0, 3600.0, False), (458.0, 3550.0, False)]
+)
+def test_the_us_minimum_ends_at_its_head_at_nominal_speed(feet, speed, covered):
+    found = estimate(nq=20.0, head_per_stage=feet * 0.3048, speed_rpm=speed)
+    rule = next(source for source in found.sources if source.name.startswith("US minimum"))
+    assert (rule.value is not None) == covered
+    assert covered or "459 ft" in rule.reason

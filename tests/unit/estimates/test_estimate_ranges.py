@@ -71,6 +71,7 @@ def test_range_of_the_us_rule():
     for nq, flow in ((30, 24.9 * GPM), (30, 1001 * M3H), (7.9, 0.01), (80.1, 0.01)):
         assert refused(us_minimum_efficiency, "ESCC", 3600, nq, flow)
     assert (us_nominal_speed(1450), us_nominal_speed(3550), us_nominal_speed(2500)) == (1800, 3600, 1800)
+    assert (us_nominal_speed(2545), us_nominal_speed(2546)) == (1800, 3600)
 
 
 def eu(market_class=ESOB_1450, **changes):
@@ -85,6 +86,8 @@ def test_scope_of_the_eu_regulation():
     assert "head is above 140 m" in eu(ESOB_2900, head=140.1)
     assert "power" in eu(power=150.1e3)
     assert "specific speed" in eu(nq=80.1)
+    assert "specific speed" in eu(nq=5.95)
+    assert eu(nq=6.0) == ""
     assert "below 6" in eu(flow=5.9 * M3H)
     assert "above 100" in eu(MSV_2900, flow=100.1 * M3H)
     assert ";" in eu(flow=5 * M3H, power=200e3)
@@ -144,3 +147,12 @@ def test_window_is_held_beyond_its_readings_and_says_so():
     assert not specific_speed_window(18 * M3H).held
     assert 13 < specific_speed_window(1000 * M3H).low < 19
     assert refused(specific_speed_window, 0.0)
+
+
+@pytest.mark.parametrize(("flow", "low"), [(18, 10), (180, 11), (360, 13), (720, 13), (1800, 19), (18000, 29)])
+def test_window_passes_through_its_readings(flow, low):
+    assert specific_speed_window(flow * M3H).low == pytest.approx(low, rel=1e-9)
+    if 18 < flow < 18000:
+        before, after = (specific_speed_window(share * flow * M3H).low for share in (0.999, 1.001))
+        assert before <= low * (1 + 1e-9) <= after * (1 + 2e-9)
+        assert after - before < 0.03

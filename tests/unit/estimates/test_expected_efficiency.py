@@ -137,6 +137,32 @@ def test_weight_of_the_survey():
     assert survey_weight(8.0, 100 * M3H) == 0.0
 
 
+@pytest.mark.parametrize(
+    ("flow", "nq", "weight", "part"),
+    [
+        (900.0, 30.0, math.log(1000 / 900) / math.log(1000 / 800), 1.0),
+        (300.0, 70.0, math.log(80 / 70) / math.log(80 / 64), 1.0),
+        (300.0, 9.0, math.log(9 / 8) / math.log(10 / 8), 1.0),
+        (20.0, 9.0, math.log(9 / 8) / math.log(10 / 8), math.log(20 / 18) / math.log(1 / 0.8)),
+        (300.0, 30.0, 1.0, 1.0),
+        (300.0, 85.0, 0.0, 1.0),
+    ],
+)
+def test_value_in_the_fade_by_its_definition(flow, nq, weight, part):
+    from bidcheck.estimates.guelich import guelich_single_stage
+    from bidcheck.estimates.market_surface import market_median
+
+    table = guelich_single_stage(nq, flow * M3H) - 0.018
+    median = market_median(ESOB_1450, nq, flow * M3H) if weight > 0 else 0.0
+    share = (1 - weight) * part
+    found = expected(flow=flow * M3H, nq_eye=nq)
+    assert found.value == pytest.approx((1 - share) * median + share * table, abs=1e-9)
+    if 0 < share < 1:
+        assert f"({100 * (1 - share):.0f} %)" in found.origin
+    if weight < 1:
+        assert "(1.8 points)" in found.origin
+
+
 @pytest.mark.parametrize("arrangement", ARRANGEMENTS)
 def test_every_arrangement_is_answered(arrangement):
     found = expected(arrangement=arrangement)

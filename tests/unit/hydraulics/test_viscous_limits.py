@@ -85,3 +85,47 @@ def test_power_balances_after_the_correction():
 def test_shutoff_is_to_be_left_out():
     with pytest.raises(OutOfRange, match="shutoff"):
         points(efficiency=np.array([0.0, 0.7]))
+
+
+@pytest.mark.parametrize(
+    ("viscosity", "flow", "head", "speed"),
+    [
+        (1.76e-6, 3.0, 20.0, 1450),
+        (100e-6, 3.0, 20.0, 1450),
+        (100e-6, 100.0, 6.0, 960),
+        (100e-6, 100.0, 20.0, 59.99 / (100 / 3600) ** 0.5 * 20**0.75),
+    ],
+)
+def test_just_inside_the_method(viscosity, flow, head, speed):
+    assert viscous_factors(viscosity, flow * M3H, head, speed).flow < 1
+
+
+@pytest.mark.parametrize(
+    ("viscosity", "flow", "head", "speed", "words"),
+    [
+        (100e-6, 2.99, 20.0, 1450, "flow"),
+        (100e-6, 100.0, 5.99, 960, "head"),
+        (100e-6, 100.0, 20.0, 60.01 / (100 / 3600) ** 0.5 * 20**0.75, "specific speed"),
+    ],
+)
+def test_just_outside_the_method(viscosity, flow, head, speed, words):
+    with pytest.raises(OutOfRange, match=words):
+        viscous_factors(viscosity, flow * M3H, head, speed)
+
+
+def test_parameter_just_below_and_at_its_end():
+    scale = viscous_parameter(1e-6, 3 * M3H, 20.0, 1450)
+    assert viscous_factors(1e-6 * (39.99 / scale) ** 2, 3 * M3H, 20.0, 1450).parameter == pytest.approx(39.99)
+    with pytest.raises(OutOfRange, match="parameter B"):
+        viscous_factors(1e-6 * (40.01 / scale) ** 2, 3 * M3H, 20.0, 1450)
+
+
+def test_head_factor_at_half_flow():
+    assert viscous_head_factor(0.9378, np.array([0.5]))[0] == pytest.approx(1 - 0.0622 * 0.5946036, abs=1e-7)
+
+
+@pytest.mark.parametrize("viscosity", [0.36e-6, 1.0e-6, 1.75e-6])
+def test_water_in_a_small_pump_is_not_corrected_for_being_water(viscosity):
+    factors = viscous_factors(viscosity, 3.0 * M3H, 20.0, 1450)
+    assert factors.parameter > 1
+    assert (factors.flow, factors.efficiency) == (1.0, 1.0)
