@@ -86,6 +86,9 @@ class Estimates:
     """Efficiency at best efficiency point of the bidder's own curve on the same basis (maximum diameter)."""
     offered_interval: float | None
     """Half the 95 % interval of it."""
+    trim_allowance: float
+    """What trimming may have cost the efficiency where only a trimmed curve is given [fraction]; given to the bidder
+    on the low side only."""
     npsh3_expected: float | None
     """NPSH3 at the maximum diameter's best efficiency flow at ordinary suction specific speed [m]."""
 

@@ -19,6 +19,9 @@ from bidcheck.quantity import Assumption
 
 SAME_DIAMETER = 0.002
 """Two diameters within 0.2 % are one. Source: common practice, no source; printed diameters are rounded to 1 mm."""
+TRIM_COST_VOLUTE, TRIM_COST_DIFFUSER = 0.25, 0.5
+"""Efficiency lost over diameter trimmed off, both fractions: a quarter and half a point per per cent of trim.
+Source: from memory, the upper ends of 0.15 to 0.25 (volute) and 0.4 to 0.5 (diffuser)."""
 
 
 def prepare(inquiry: Inquiry, bid: Bid, all_bids: tuple[Bid, ...] = ()) -> Case:
@@ -185,6 +188,14 @@ def _basis(bid: Bid, curve: Curve | None) -> str:
     return "curve of the largest diameter given"
 
 
+def _trim_allowance(bid: Bid, curve: Curve) -> float:
+    """What trimming may have cost the efficiency of a curve below the maximum diameter [fraction]."""
+    if curve.impeller is None or bid.impeller_max is None or curve.impeller >= bid.impeller_max:
+        return 0.0
+    cost = TRIM_COST_DIFFUSER if bid.casing_type == "diffuser" else TRIM_COST_VOLUTE
+    return cost * (1.0 - curve.impeller / bid.impeller_max)
+
+
 def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, water: str) -> Estimates:
     """Specific speeds at the best efficiency point of the largest diameter, and what is to be expected there."""
     basis = _basis(bid, curve)
@@ -198,6 +209,7 @@ def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, water: str) -> 
             efficiency=None,
             offered_efficiency=None,
             offered_interval=None,
+            trim_allowance=0.0,
             npsh3_expected=None,
         )
     head = bep.head / bid.stages
@@ -226,5 +238,6 @@ def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, water: str) -> 
         efficiency=efficiency,
         offered_efficiency=bep.efficiency,
         offered_interval=half_width,
+        trim_allowance=_trim_allowance(bid, curve),
         npsh3_expected=expected_npsh3(bid.speed_rpm, eye_flow).ordinary,
     )

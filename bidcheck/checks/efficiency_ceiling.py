@@ -52,6 +52,12 @@ CHECK = Check(
     otherwise=Verdict.FAIL,
     source="loss balance: Daily and Nece 1960 (disc friction), Gülich Table 3.5 (leakage)",
     wordings={
+        "above, no diameter": Wording(
+            "Best efficiency {claim} is {above_ceiling} above the ceiling {ceiling} that disc friction, leakage and the"
+            " best hydraulic efficiency leave for the smallest diameter likely at this speed and head.",
+            "Your curve peaks at {claim}, more than the losses of any likely impeller leave at this speed, head and flow"
+            " ({ceiling}). Please state the impeller diameter, and correct the efficiency or the figures it belongs to.",
+        ),
         "": Wording("Best efficiency {claim} stays below the loss ceiling, {ceiling}."),
         "above": Wording(
             "Best efficiency {claim} is {above_ceiling} above the ceiling {ceiling} that disc friction, leakage and"

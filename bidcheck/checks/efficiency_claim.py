@@ -3,8 +3,8 @@
 The efficiency of the bidder's curve at best efficiency is held against estimates that do not come from the bidder:
 the middle of the surveyed market of its class, and what a published chart calls practically attainable. A claim
 above the attainable asks for a test; one far above it is called implausible. A low claim is poor for its class or
-stated on another basis. No such estimate can show an overstatement of 3 points; 5 seldom, 8 mostly, 10 nearly
-always.
+stated on another basis; what trimming may have cost is given to the bidder there. No such estimate can show an
+overstatement of 3 points; 5 seldom, 8 mostly, 10 nearly always.
 """
 
 from collections.abc import Iterator
@@ -50,7 +50,7 @@ def _limit(name: str, at_least: float | None, at_most: float | None, origin: str
 def _placed(case: Case, estimate: EfficiencyEstimate, claim: float) -> Measured:
     """The first step of the ladder that the claim stands on, from the top."""
     high = _above(estimate, claim, _doubt(case))
-    step = high if high is not None else _below(estimate, claim)
+    step = high if high is not None else _below(estimate, claim, case.estimates.trim_allowance)
     wording, verdict, limit = step if step is not None else ("", Verdict.PASS, _band(estimate))
     if estimate.expected is None:
         wording = f"{wording}, no expected value".removeprefix(", ")
@@ -101,18 +101,18 @@ def _above(estimate: EfficiencyEstimate, claim: float, doubt: float) -> tuple[st
     return None
 
 
-def _below(estimate: EfficiencyEstimate, claim: float) -> tuple[str, Verdict, Limit] | None:
+def _below(estimate: EfficiencyEstimate, claim: float, allowance: float) -> tuple[str, Verdict, Limit] | None:
     """Steps below the expected value."""
     if estimate.query_below is not None:
         origin = "two spreads of the surveyed market below its middle"
         limit = _limit("efficiency_very_low", estimate.query_below, None, origin, "derived")
-        if not within(claim, limit).holds:
+        if not within(claim, limit, slack=allowance).holds:
             verdict = Verdict.REMARK if estimate.lenient_low else Verdict.QUERY
             return "very low", verdict, limit
     if estimate.remark_below is not None:
         origin = "1.28 spreads of the surveyed market below its middle, about the worst tenth"
         limit = _limit("efficiency_low", estimate.remark_below, None, origin, "derived")
-        if not within(claim, limit).holds:
+        if not within(claim, limit, slack=allowance).holds:
             return "low", Verdict.REMARK, limit
     return None
 

@@ -81,3 +81,32 @@ def test_ceiling_is_missed_only_beyond_the_doubt_of_the_fit(efficiency, verdict)
 def test_no_ceiling_is_not_a_pass():
     finding = judge(efficiency_ceiling.CHECK, claimed(0.9, ceiling=None, reason="outside"))["best efficiency"]
     assert finding.verdict is Verdict.NOT_APPLICABLE
+
+
+@pytest.mark.parametrize(
+    ("allowance", "verdict"), [(0.0, Verdict.QUERY), (0.0101, Verdict.REMARK), (0.04, Verdict.PASS)]
+)
+def test_what_trimming_may_have_cost_is_given_on_the_low_side_only(allowance, verdict):
+    case = claimed(0.71)
+    case = replace(case, estimates=replace(case.estimates, trim_allowance=allowance))
+    assert judge(efficiency_claim.CHECK, case)["best efficiency"].verdict is verdict
+    high = claimed(0.91)
+    high = replace(high, estimates=replace(high.estimates, trim_allowance=allowance))
+    assert judge(efficiency_claim.CHECK, high)["best efficiency"].verdict is Verdict.QUERY
+
+
+def test_trim_allowance_follows_from_the_diameters():
+    trimmed = sound_case({"impeller_max": 0.4577777778})  # 10 % off
+    assert trimmed.estimates.trim_allowance == pytest.approx(0.025, abs=1e-6)
+    diffuser = sound_case({"impeller_max": 0.4577777778, "casing_type": "diffuser"})
+    assert diffuser.estimates.trim_allowance == pytest.approx(0.05, abs=1e-6)
+    assert sound_case({"impeller_max": None}).estimates.trim_allowance == 0.0
+
+
+def test_a_ceiling_without_a_diameter_does_not_speak_of_one():
+    case = claimed(0.95)
+    assert case.max_curve is not None
+    bare = replace(case, max_curve=replace(case.max_curve, impeller=None))
+    finding = judge(efficiency_ceiling.CHECK, bare)["best efficiency"]
+    assert finding.verdict is Verdict.FAIL
+    assert "your own impeller" not in finding.wording.question
