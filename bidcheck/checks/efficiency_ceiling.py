@@ -40,8 +40,9 @@ def run(case: Case) -> Iterator[Measured]:
     }
     evidence |= {name.replace(" ", "_"): share(loss) for name, loss in estimate.ceiling_terms.items()}
     compared = within(claim, limit, slack=doubt)
+    above = "above" if case.max_curve is not None and case.max_curve.impeller is not None else "above, no diameter"
     yield Measured(
-        subject="best efficiency", holds=compared, evidence=evidence, wording="" if compared.holds else "above"
+        subject="best efficiency", holds=compared, evidence=evidence, wording="" if compared.holds else above
     )
 
 
@@ -55,8 +56,9 @@ CHECK = Check(
         "above, no diameter": Wording(
             "Best efficiency {claim} is {above_ceiling} above the ceiling {ceiling} that disc friction, leakage and the"
             " best hydraulic efficiency leave for the smallest diameter likely at this speed and head.",
-            "Your curve peaks at {claim}, more than the losses of any likely impeller leave at this speed, head and flow"
-            " ({ceiling}). Please state the impeller diameter, and correct the efficiency or the figures it belongs to.",
+            "Your curve peaks at {claim}, more than the losses of any likely impeller leave at this speed, head and"
+            " flow ({ceiling}). Please state the impeller diameter, and correct the efficiency or the figures it"
+            " belongs to.",
         ),
         "": Wording("Best efficiency {claim} stays below the loss ceiling, {ceiling}."),
         "above": Wording(

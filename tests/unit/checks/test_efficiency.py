@@ -25,7 +25,9 @@ def claimed(efficiency: float | None, **changes: object) -> Case:
     case = sound_case()
     assert case.estimates.efficiency is not None
     estimate = replace(case.estimates.efficiency, **(LADDER | changes))
-    estimates = replace(case.estimates, efficiency=estimate, offered_efficiency=efficiency, offered_interval=0.004)
+    estimates = replace(
+        case.estimates, efficiency=estimate, offered_efficiency=efficiency, offered_interval=0.004, trim_allowance=0.0
+    )
     return replace(case, estimates=estimates)
 
 
