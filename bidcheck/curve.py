@@ -7,6 +7,7 @@ import numpy as np
 import numpy.typing as npt
 
 from bidcheck.errors import OutOfRange
+from bidcheck.quantity import Kind
 
 if TYPE_CHECKING:
     from numpy.polynomial import Polynomial
@@ -15,6 +16,18 @@ Floats = npt.NDArray[np.float64]
 Ints = npt.NDArray[np.int64]
 Column = Literal["head", "efficiency", "power", "npsh3"]
 COLUMNS: tuple[Column, ...] = ("head", "efficiency", "power", "npsh3")
+COLUMN_WORDS: dict[Column, str] = {
+    "head": "head",
+    "efficiency": "efficiency",
+    "power": "shaft power",
+    "npsh3": "NPSH3",
+}
+COLUMN_KINDS: dict[Column, Kind] = {
+    "head": Kind.HEAD,
+    "efficiency": Kind.SHARE,
+    "power": Kind.POWER,
+    "npsh3": Kind.NPSH,
+}
 
 
 @dataclass(frozen=True, eq=False, slots=True)

@@ -11,11 +11,9 @@ from bidcheck.case import Case
 from bidcheck.checks.evidence import count, flow, text, whole_share
 from bidcheck.checks.request import asked
 from bidcheck.checks.verdicts import missed
-from bidcheck.curve import COLUMNS, Column, Fits
+from bidcheck.curve import COLUMN_WORDS, COLUMNS, Fits
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import within
-
-WORDS: dict[Column, str] = {"head": "head", "efficiency": "efficiency", "power": "shaft power", "npsh3": "NPSH3"}
 
 
 def largest_flow(case: Case) -> float:
@@ -37,14 +35,18 @@ def run(case: Case) -> Iterator[Measured]:
         yield Measured(
             subject=f"{column} points",
             holds=counted,
-            evidence={"quantity": text(WORDS[column]), "points": count(len(points))},
+            evidence={"quantity": text(COLUMN_WORDS[column]), "points": count(len(points))},
             wording="points",
         )
         last, asked_flow = float(points.flow[-1]), largest_flow(case)
         yield Measured(
             subject=f"{column} reach",
             holds=within(last / asked_flow, limits.curve_reach),
-            evidence={"quantity": text(WORDS[column]), "last_flow": flow(last), "largest_flow": flow(asked_flow)},
+            evidence={
+                "quantity": text(COLUMN_WORDS[column]),
+                "last_flow": flow(last),
+                "largest_flow": flow(asked_flow),
+            },
         )
     yield from _ends(case, case.fits)
 

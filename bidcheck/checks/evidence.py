@@ -1,5 +1,6 @@
 """Short names for evidence of each kind. Values in SI; shares and efficiencies as fractions."""
 
+from bidcheck.curve import COLUMN_KINDS, Column
 from bidcheck.finding import Evidence
 from bidcheck.quantity import Kind
 
@@ -62,3 +63,8 @@ def suction_specific_speed(value: float) -> Evidence:
 def text(value: str) -> Evidence:
     """Words."""
     return Evidence(value, Kind.TEXT)
+
+
+def of_column(value: float, column: Column) -> Evidence:
+    """A figure of a column of the curve, in its SI."""
+    return Evidence(value, COLUMN_KINDS[column])

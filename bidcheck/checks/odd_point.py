@@ -9,15 +9,12 @@ shown with the value that would fit.
 from collections.abc import Iterator
 
 from bidcheck.case import Case
-from bidcheck.checks.curve_coverage import WORDS
-from bidcheck.checks.evidence import flow, head, npsh, power, share, text
+from bidcheck.checks.evidence import flow, of_column, share, text
 from bidcheck.checks.request import asked
 from bidcheck.checks.verdicts import missed
-from bidcheck.curve import COLUMNS, Column, Fits, OddPoint
+from bidcheck.curve import COLUMN_WORDS, COLUMNS, Column, Fits, OddPoint
 from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
 from bidcheck.limits import within
-
-AS_EVIDENCE = {"head": head, "efficiency": share, "power": power, "npsh3": npsh}
 
 
 def run(case: Case) -> Iterator[Measured]:
@@ -38,17 +35,16 @@ def _odd(case: Case, file: str, odd: OddPoint) -> Measured:
     limit = case.inquiry.limits.odd_point
     large = not within(abs(odd.deviation), limit).holds
     name = file.rsplit("/", 1)[-1]
-    kind = AS_EVIDENCE[odd.column]
     return Measured(
         subject=f"{name}:{odd.line} {odd.column}",
         verdict=missed(limit, Verdict.QUERY) if large else Verdict.REMARK,
         limit=limit,
         evidence={
-            "quantity": text(WORDS[odd.column]),
+            "quantity": text(COLUMN_WORDS[odd.column]),
             "place": text(f"{name}, line {odd.line}"),
             "flow": flow(odd.flow),
-            "found": kind(odd.value),
-            "would_fit": kind(odd.would_fit),
+            "found": of_column(odd.value, odd.column),
+            "would_fit": of_column(odd.would_fit, odd.column),
             "deviation": share(abs(odd.deviation)),
         },
     )
@@ -59,12 +55,11 @@ def _doubtful(fits: Fits, column: Column) -> Iterator[Measured]:
     fit = fits.of(column)
     if fit is None or fit.guard_flow is None or fit.guard_difference is None:
         return
-    kind = AS_EVIDENCE[column]
     evidence: dict[str, Evidence] = {
-        "quantity": text(WORDS[column]),
+        "quantity": text(COLUMN_WORDS[column]),
         "flow": flow(fit.guard_flow),
-        "fitted": kind(fit.at(fit.guard_flow)),
-        "interpolated": kind(fit.at(fit.guard_flow) + fit.guard_difference),
+        "fitted": of_column(fit.at(fit.guard_flow), column),
+        "interpolated": of_column(fit.at(fit.guard_flow) + fit.guard_difference, column),
     }
     yield Measured(subject=f"{column} fit", verdict=Verdict.REMARK, evidence=evidence, wording="doubtful fit")
 

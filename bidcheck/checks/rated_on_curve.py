@@ -8,12 +8,10 @@ printed digits, the fit and 2 %.
 from collections.abc import Iterator
 
 from bidcheck.case import Case
-from bidcheck.checks.curve_coverage import WORDS
-from bidcheck.checks.evidence import share, text
-from bidcheck.checks.odd_point import AS_EVIDENCE
+from bidcheck.checks.evidence import of_column, share, text
 from bidcheck.checks.request import not_applicable
 from bidcheck.checks.verdicts import missed
-from bidcheck.curve import COLUMNS, Column, Fit
+from bidcheck.curve import COLUMN_WORDS, COLUMNS, Column, Fit
 from bidcheck.explain import (
     UNIT_MISTAKES,
     Quantity,
@@ -57,11 +55,10 @@ def _compared(
     curve, limit = fit.at(flow), case.inquiry.limits.claim_on_curve
     gap = claim.value / curve
     slack = (claim.half_digit + _doubt(fit, flow)) / curve
-    kind = AS_EVIDENCE[column]
     evidence = {
-        "quantity": text(WORDS[column]),
-        "claim": kind(claim.value),
-        "curve": kind(curve),
+        "quantity": text(COLUMN_WORDS[column]),
+        "claim": of_column(claim.value, column),
+        "curve": of_column(curve, column),
         "gap": share(abs(gap - 1)),
     }
     compared = within(abs(gap - 1.0), limit, slack=slack)

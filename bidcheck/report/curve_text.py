@@ -6,21 +6,13 @@ from rich.console import Console
 from rich.table import Table
 from rich.text import Text
 
-from bidcheck.checks.curve_coverage import WORDS
 from bidcheck.checks.power_balance import balanced_rows
-from bidcheck.curve import COLUMNS, Column, Curve, Fit, Fits, Floats
+from bidcheck.curve import COLUMN_KINDS, COLUMN_WORDS, COLUMNS, Curve, Fit, Fits, Floats
 from bidcheck.explain import BALANCE, UNIT_MISTAKES, frequency_mistakes, in_words, mistakes_that_close
 from bidcheck.hydraulics.specific_speed import specific_speed, suction_specific_speed
 from bidcheck.quantity import Kind, UnitSystem
 from bidcheck.report.format import bare, figure, plain
 from bidcheck.report.terminal import print_trimmed
-
-KIND_OF: dict[Column, Kind] = {
-    "head": Kind.HEAD,
-    "efficiency": Kind.SHARE,
-    "power": Kind.POWER,
-    "npsh3": Kind.NPSH,
-}
 
 
 def print_curve(fits: Fits, curve: Curve, console: Console, system: UnitSystem) -> None:
@@ -54,7 +46,7 @@ def _fits_table(fits: Fits, system: UnitSystem) -> Table:
         fit = fits.of(column)
         if fit is None:
             continue
-        name = WORDS[column] + (" (derived)" if fit.derived else "")
+        name = COLUMN_WORDS[column] + (" (derived)" if fit.derived else "")
         table.add_row(name, str(fit.points), str(fit.degree), *_range(fit, system), *_residuals(fit, system))
     return table
 
@@ -67,7 +59,8 @@ def _range(fit: Fit, system: UnitSystem) -> tuple[str, str]:
 
 def _residuals(fit: Fit, system: UnitSystem) -> tuple[str, str]:
     """Residuals, with a digit more than the figures themselves."""
-    return tuple(_fine(value, KIND_OF[fit.column], system) for value in (fit.rms, fit.largest_residual))  # type: ignore[return-value]
+    kind = COLUMN_KINDS[fit.column]
+    return _fine(fit.rms, kind, system), _fine(fit.largest_residual, kind, system)
 
 
 def _fine(value: float, kind: Kind, system: UnitSystem) -> str:
@@ -102,9 +95,9 @@ def odd_lines(fits: Fits, curve: Curve, system: UnitSystem) -> list[str]:
     name = plain(curve.file.rsplit("/", 1)[-1])
     lines = []
     for odd in fits.odd_points:
-        kind = KIND_OF[odd.column]
+        kind = COLUMN_KINDS[odd.column]
         lines.append(
-            f"odd point: {WORDS[odd.column]} {figure(odd.value, kind, system)} at"
+            f"odd point: {COLUMN_WORDS[odd.column]} {figure(odd.value, kind, system)} at"
             f" {figure(odd.flow, Kind.FLOW, system)} ({name}, line {odd.line}); {figure(odd.would_fit, kind, system)}"
             " would fit; left out of the fit"
         )

@@ -6,7 +6,7 @@ from collections.abc import Mapping
 from typing import Any
 
 from bidcheck.case import AtFlow, EfficiencyEstimate, Estimates, Source
-from bidcheck.curve import COLUMNS, Column, Fit, Fits
+from bidcheck.curve import COLUMN_KINDS, COLUMNS, Fit, Fits
 from bidcheck.evaluation import BidEvaluation, Evaluation
 from bidcheck.finding import Evidence, Finding
 from bidcheck.inquiry import Inquiry
@@ -17,12 +17,6 @@ from bidcheck.units import from_si
 
 SCHEMA = "bidcheck/evaluation/1"
 DIGITS = 9
-KIND_OF: dict[Column, Kind] = {
-    "head": Kind.HEAD,
-    "efficiency": Kind.SHARE,
-    "power": Kind.POWER,
-    "npsh3": Kind.NPSH,
-}
 
 
 def evaluation_json(evaluation: Evaluation) -> str:
@@ -179,7 +173,7 @@ def _fit(fit: Fit | None) -> dict[str, Any] | None:
     """A fit in m, fraction, kW, m over u = (2Q - lo - hi)/(hi - lo)."""
     if fit is None:
         return None
-    kind = KIND_OF[fit.column]
+    kind = COLUMN_KINDS[fit.column]
     return {
         "degree": fit.degree,
         "coefficients": [_in(float(value), kind) for value in fit.polynomial.coef],
