@@ -8,8 +8,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, specific_speed, text
-from bidcheck.checks.request import Item, asked, not_applicable
-from bidcheck.errors import OutOfRange
+from bidcheck.checks.request import Item, asked
 from bidcheck.estimates.window import specific_speed_window
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import Limit, within
@@ -23,11 +22,7 @@ def run(case: Case) -> Iterator[Measured]:
         missing: Item = "water curve" if case.water and case.curve is not None else "best efficiency"
         yield asked("best efficiency", missing)
         return
-    try:
-        window = specific_speed_window(bep.flow)
-    except OutOfRange as error:
-        yield not_applicable("best efficiency", str(error))
-        return
+    window = specific_speed_window(bep.flow)
     limit = Limit(
         "specific_speed_window",
         Kind.SPECIFIC_SPEED,
