@@ -57,6 +57,11 @@ UNIT_MISTAKES: tuple[Mistake, ...] = (
         "flow is in m³/h under an imperial gpm heading",
     ),
     *_both_ways("flow", 3.6, "flow is in m³/h under an l/s heading", "flow is in l/s under an m³/h heading"),
+    *_both_ways("flow", 3600.0, "flow is in m³/h under an m³/s heading", "flow is in m³/s under an m³/h heading"),
+    *_both_ways("flow", 1000.0, "flow is in l/s under an m³/s heading", "flow is in m³/s under an l/s heading"),
+    *_both_ways(
+        "flow", 1000.0 / 60.0, "flow is in L/min under an m³/h heading", "flow is in m³/h under an L/min heading"
+    ),
     *_both_ways("head", FEET, "head is in ft under an m heading", "head is in m under a ft heading"),
 )
 """Units put under the wrong heading. Source: factors of the units (NIST SP 811)."""

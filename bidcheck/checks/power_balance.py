@@ -192,7 +192,7 @@ CHECK = Check(
             " guaranteed, and correct the others.",
         ),
         "explained": Wording(
-            "Efficiency that follows from flow, head and power is only {followed_over_stated} of that stated. One"
+            "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated. One"
             " mistake would close the gap: {mistakes}.",
             "Your head, power and efficiency disagree: ρgQH/P comes to {followed_over_stated} of the stated"
             " efficiency. It looks as if {mistakes}. Please confirm and correct.",

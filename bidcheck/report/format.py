@@ -1,9 +1,10 @@
 """Figures as a person prints them: trade units, the digits they deserve. The only place where anything is rounded."""
 
 import math
+import re
 import unicodedata
 
-from bidcheck.quantity import Kind, UnitSystem
+from bidcheck.quantity import KINDS, Kind, UnitSystem
 from bidcheck.units import from_si
 
 NOTHING = "–"
@@ -11,6 +12,11 @@ NARROW_SPACE = "\u202f"
 SHARES = (Kind.SHARE, Kind.WHOLE_SHARE)
 THREE_DIGITS = (Kind.FLOW, Kind.POWER)
 """Kinds printed with three digits at least: small pumps have small flows and powers."""
+
+_UNITS = {printed.unit for kind in KINDS.values() for printed in (kind.si, kind.us)} - {""}
+_BEFORE_UNIT = re.compile(rf"(?<=\d) (?=(?:{'|'.join(map(re.escape, sorted(_UNITS, reverse=True)))})(?!\w))")
+MANY_TIMES = 10.0
+"""A ratio from which it is printed as so many times, not in per cent."""
 
 
 def number(value: float, decimals: int) -> str:
@@ -87,7 +93,7 @@ def figure(value: float | str | None, kind: Kind, system: UnitSystem) -> str:
         us = f"{number(_rounded_us(value, kind), 0)} US"
         return f"{number(value, 0)} ({us})" if system is UnitSystem.SI else us
     if kind in SHARES:
-        return f"{bare(value, kind, system)} %"
+        return f"{number(value, 0)} times" if abs(value) >= MANY_TIMES else f"{bare(value, kind, system)} %"
     unit = kind.printed(system).unit
     return f"{bare(value, kind, system)} {unit}".rstrip()
 
@@ -106,3 +112,14 @@ def plain(text: str) -> str:
     'alder[31m'
     """
     return "".join(c for c in text if c in "\n\t" or unicodedata.category(c) not in ("Cc", "Cf"))
+
+
+def tied(text: str) -> str:
+    r"""Text in which no line breaks between a figure and its unit.
+
+    Examples
+    --------
+    >>> tied("at 520 m³/h for 3 more")
+    'at 520\xa0m³/h for 3 more'
+    """
+    return _BEFORE_UNIT.sub("\u00a0", text).replace("US gpm", "US\u00a0gpm")

@@ -1,17 +1,13 @@
 """Templates of the page: everything is escaped that is not marked as markup, a missing name is an error."""
 
-import re
 from functools import lru_cache
 from importlib.resources import files
 from typing import TYPE_CHECKING
 
-from bidcheck.quantity import KINDS
+from bidcheck.report.format import tied
 
 if TYPE_CHECKING:
     import jinja2
-
-_UNITS = {printed.unit for kind in KINDS.values() for printed in (kind.si, kind.us)} - {""}
-_BEFORE_UNIT = re.compile(rf"(?<=\d) (?=(?:{'|'.join(map(re.escape, sorted(_UNITS, reverse=True)))})(?!\w))")
 
 
 def template(name: str) -> "jinja2.Template":
@@ -33,14 +29,3 @@ def _environment() -> "jinja2.Environment":
     )
     environment.filters["tied"] = tied
     return environment
-
-
-def tied(text: str) -> str:
-    r"""Text in which no line breaks between a figure and its unit.
-
-    Examples
-    --------
-    >>> tied("at 520 m³/h for 3 more")
-    'at 520\xa0m³/h for 3 more'
-    """
-    return _BEFORE_UNIT.sub("\u00a0", text).replace("US gpm", "US\u00a0gpm")

@@ -8,7 +8,7 @@ from bidcheck.evaluation import BidEvaluation, Evaluation, Outcome
 from bidcheck.finding import Finding, Verdict
 from bidcheck.inquiry import Inquiry
 from bidcheck.quantity import Kind, UnitSystem
-from bidcheck.report.format import figure, plain
+from bidcheck.report.format import figure, plain, tied
 from bidcheck.report.tabulation import margin_in_words
 from bidcheck.report.words import (
     CAUTION,
@@ -24,6 +24,10 @@ from bidcheck.report.words import (
 
 CHECK_WIDTH = 24
 """Room for the longest name of a check and a blank."""
+
+HIDE = str.maketrans({"\u00a0": "\ue000", "\u202f": "\ue001"})
+SHOW = str.maketrans({"\ue000": " ", "\ue001": "\u202f"})
+"""Spaces at which no line may break, out of sight of the wrapping and back."""
 
 STYLES = {
     Verdict.FAIL: "bold red",
@@ -142,8 +146,10 @@ def _print_finding(finding: Finding, console: Console, system: UnitSystem, asked
     lead.append(f"{VERDICT_WORDS[finding.verdict]:<8}", style=STYLES[finding.verdict])
     lead.append(f"{finding.check:<{CHECK_WIDTH}}")
     words = _said(finding, system, asked)
+    words.plain = tied(words.plain).translate(HIDE)
     for number, line in enumerate(words.wrap(console, max(console.width - len(lead), 30))):
         line.rstrip()
+        line.plain = line.plain.translate(SHOW)
         console.print((lead if number == 0 else Text(" " * len(lead))) + line, soft_wrap=True)
 
 

@@ -22,6 +22,9 @@ BALANCE = {"flow": 1, "head": 1, "power": -1}
         (3.281, "head is in ft under an m heading"),
         (1 / 3.6, "flow is in l/s under an m³/h heading"),
         (1.201, "flow is in US gpm under an imperial one"),
+        (3600.0, "flow is in m³/h under an m³/s heading"),
+        (1000.0, "flow is in l/s under an m³/s heading"),
+        (1000 / 60, "flow is in L/min under an m³/h heading"),
     ],
 )
 def test_units_under_the_wrong_heading(gap, words):

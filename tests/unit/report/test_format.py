@@ -24,6 +24,7 @@ M3H = 1 / 3600
         (9_520.0, Kind.POWER, SI, "9.52 kW"),
         (0.8264, Kind.SHARE, SI, "82.6 %"),
         (0.944, Kind.WHOLE_SHARE, US, "94 %"),
+        (3601.2, Kind.SHARE, SI, "3601 times"),
         (0.089, Kind.POINTS, SI, "8.9 points"),
         (0.412, Kind.DIAMETER, SI, "412 mm"),
         (0.412, Kind.DIAMETER, US, "16.22 in"),

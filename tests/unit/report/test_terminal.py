@@ -58,3 +58,10 @@ def test_bids_left_out_are_named_and_text_cannot_colour(evaluation):
     assert "bids/fir/bid.toml:3" in text
     assert "\x1b" not in text
     assert "\x07" not in text
+
+
+def test_no_line_breaks_between_a_figure_and_its_unit(evaluation):
+    for width in range(80, 140, 7):
+        findings = printed(evaluation, width).split("39 passed", 1)[1]
+        for line in findings.splitlines():
+            assert line.split()[:1] not in (["m"], ["m."], ["%"], ["%."], ["m³/h"], ["kW"], ["points"])
