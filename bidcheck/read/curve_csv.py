@@ -66,7 +66,7 @@ def read_curve_csv(text: str, source: Source) -> dict[Column, Points]:
 
 def _content(text: str) -> tuple[list[tuple[int, str]], str | None]:
     """Lines that are neither blank nor comments, with their numbers, and the separator where a line declares it."""
-    lines = [(number, line) for number, line in enumerate(text.split("\n"), start=1) if line.strip(" \t;,")]
+    lines = [(number, line) for number, line in enumerate(text.split("\n"), start=1) if line.strip().strip(" \t;,")]
     lines = [(number, line) for number, line in lines if not line.lstrip().startswith("#")]
     if lines and (match := _SEPARATOR_LINE.fullmatch(lines[0][1].strip())):
         return lines[1:], match[1]
@@ -85,7 +85,8 @@ def _split(lines: list[tuple[int, str]], separator: str, source: Source) -> list
     for number, line in lines:
         try:
             cells = next(csv.reader([line], delimiter=separator, skipinitialspace=True, strict=True), [])
-            rows.append(_Row(number, [cell.strip() for cell in cells]))
+            if cells:
+                rows.append(_Row(number, [cell.strip() for cell in cells]))
         except csv.Error as error:
             too_long = "limit" in str(error)
             text = "has a cell far too long" if too_long else 'has a quotation mark " that is not closed'
@@ -116,6 +117,10 @@ def _headings(rows: list[_Row], source: Source) -> tuple[list[Heading], list[_Ro
     for problem in missing_units(headings):
         source.problem(problem, header.line)
     return headings, rest
+
+
+_POINT_OR_THOUSANDS = re.compile(r"[1-9]\d{0,2}\.\d{3}")
+"""A point before three digits: with semicolons or tabs between columns it may as well divide thousands."""
 
 
 def _cells(headings: list[Heading], rows: list[_Row], separator: str, source: Source) -> list[list[Cell | None]]:
@@ -152,9 +157,11 @@ def _decimal_comma(headings: list[Heading], rows: list[_Row], source: Source) ->
             f'has a decimal comma in "{first[2]}" (line {first[1]}) and a decimal point in "{second[2]}"; use one mark',
             second[1],
         )
+    nowhere_else = not commas and bool(points) and all(_POINT_OR_THOUSANDS.fullmatch(cell) for _, _, cell in points)
     for heading in headings:
         cells = [item for item in used if item[0] is heading]
-        if looks_like_thousands([cell for _, _, cell in cells]):
+        marked = any("." in cell or "," in cell for _, _, cell in cells)
+        if looks_like_thousands([cell for _, _, cell in cells]) or (nowhere_else and marked):
             line, cell = next((line, cell) for _, line, cell in cells if "." in cell or "," in cell)
             plain = cell.replace(".", "").replace(",", "")
             point = cell.replace(",", ".")

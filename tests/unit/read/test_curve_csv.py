@@ -1,7 +1,8 @@
 import numpy as np
 import pytest
 
-from bidcheck.read import curve_csv
+from bidcheck.errors import InputError
+from bidcheck.read import curve_csv, read_curve_file
 from bidcheck.read.curve_csv import read_curve_csv
 from bidcheck.read.source import Source
 
@@ -175,3 +176,24 @@ def test_row_limit(monkeypatch):
     monkeypatch.setattr(curve_csv, "MOST_ROWS", 2)
     assert len(read(PLAIN)["head"]) == 2
     assert "more than the 2 read" in problems(PLAIN + "1, 2, 3\n4, 5, 6\n7, 8, 9\n")[0]
+
+
+@pytest.mark.parametrize(
+    ("rows", "refused"),
+    [
+        ("0;74\n1.200;72\n1.500;70\n", True),  # nothing in the file tells whether the point divides thousands
+        ("0;74.0\n1.200;72.5\n1.500;70.0\n", False),
+        ("0.000;74\n1.200;72\n1.500;70\n", False),
+        ("0;74\n0.900;73\n1.200;72\n", False),
+    ],
+)
+def test_a_point_that_may_divide_thousands_is_refused(tmp_path, rows, refused):
+    path = tmp_path / "curve.csv"
+    path.write_text("flow [m3/h];head [m]\n" + rows, encoding="utf-8")
+    if refused:
+        with pytest.raises(InputError, match=r"may be 1200 or 1\.200"):
+            read_curve_file(path, speed_rpm=1480.0)
+    else:
+        (curve,) = read_curve_file(path, speed_rpm=1480.0)
+        assert curve.head is not None
+        assert len(curve.head) == 3
