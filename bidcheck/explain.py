@@ -111,7 +111,12 @@ def density_mistakes(density: float) -> tuple[Mistake, ...]:
     if abs(density / 1000.0 - 1.0) < CLOSE:
         return ()
     return (
-        *_both_ways("power", 1000.0 / density, "density is left out of power", "density is counted twice in power"),
+        *_both_ways(
+            "power",
+            1000.0 / density,
+            "density is left out of power",
+            "power is for the liquid pumped, the rest for water",
+        ),
     )
 
 
