@@ -102,6 +102,8 @@ class Bid:
     impeller_rated: float | None = None
     impeller_max: float | None = None
     impeller_min: float | None = None
+    impeller_material: str = ""
+    """As the bidder words it; empty where not stated."""
     performance_basis: Literal["pump", "bowl"] | None = None
     references: int | None = None
     claims: Claims = Claims()

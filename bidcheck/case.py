@@ -1,96 +1,12 @@
 """Everything a check may look at for one bid: the inquiry, the bid, its fits, the estimates, the other bids."""
 
-from collections.abc import Mapping
 from dataclasses import dataclass
 
 from bidcheck.bid import Bid
 from bidcheck.curve import Column, Curve, Fits
 from bidcheck.inquiry import Inquiry
 from bidcheck.quantity import Assumption
-
-
-@dataclass(frozen=True, slots=True)
-class Source:
-    """One independent estimate: value as a fraction, or None with the reason it does not apply.
-
-    `spread` is the band it is stated with, as a fraction, None where its source gives none.
-    """
-
-    name: str
-    value: float | None
-    valid: str
-    """Range it holds in, in words."""
-    reason: str
-    """Why it gives no value here; empty where it does."""
-    mark: str
-    origin: str
-    """Where it is published."""
-    spread: float | None = None
-
-
-@dataclass(frozen=True, slots=True, kw_only=True)
-class EfficiencyEstimate:
-    """Independent picture of efficiency at best efficiency, fractions. None where there is none to give.
-
-    The thresholds are those of the combination: a claim above `ceiling` contradicts the losses, above
-    `implausible_above` or `attainable` asks for a test, above `remark_above` is worth a remark; below
-    `remark_below` or `query_below` it is poor for its class.
-    """
-
-    sources: tuple[Source, ...]
-    market_class: str
-    """Class of the market survey used, empty where there is none."""
-    market_median: float | None
-    """Median of the surveyed market at this size and speed; None where the survey does not reach."""
-    expected: float | None
-    expected_from: str
-    """Which source the expected value comes from, in words."""
-    attainable: float | None
-    ceiling: float | None
-    ceiling_terms: Mapping[str, float]
-    """Losses behind the ceiling, as shares."""
-    sigma: float | None
-    """Spread of merit on the market, fraction; None where the class has none."""
-    implausible_above: float | None
-    remark_above: float | None
-    remark_below: float | None
-    query_below: float | None
-    lenient_low: bool
-    """Whether a low claim is never more than a remark (small, narrow, solids-handling, sealless, multistage)."""
-    reason: str
-    """Why nothing can be judged; empty where something can."""
-
-    def market_share_below(self, efficiency: float) -> float | None:
-        """Share of the surveyed market with a lower efficiency at this size and speed; None without a class."""
-        from math import erf, sqrt
-
-        if self.market_median is None or self.sigma is None:
-            return None
-        return 0.5 * (1.0 + erf((efficiency - self.market_median) / self.sigma / sqrt(2.0)))
-
-
-@dataclass(frozen=True, slots=True, kw_only=True)
-class Estimates:
-    """What a pump of this duty should show, and the specific speeds it rests on (water, maximum diameter where given).
-
-    nq in 1/min, m³/s, m per stage: `nq` for total flow, `nq_eye` per suction eye. `nss` per eye, metric. `basis` says
-    in words which curve they were taken from. None where the curve gives no best efficiency point.
-    """
-
-    nq: float | None
-    nq_eye: float | None
-    nss: float | None
-    basis: str
-    efficiency: EfficiencyEstimate | None
-    offered_efficiency: float | None
-    """Efficiency at best efficiency point of the bidder's own curve on the same basis (maximum diameter)."""
-    offered_interval: float | None
-    """Half the 95 % interval of it."""
-    trim_allowance: float
-    """What trimming may have cost the efficiency where only a trimmed curve is given [fraction]; given to the bidder
-    on the low side only."""
-    npsh3_expected: float | None
-    """NPSH3 at the maximum diameter's best efficiency flow at ordinary suction specific speed [m]."""
+from bidcheck.second_opinion import Estimates
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -138,6 +54,7 @@ class Case:
     """Flows the pump must serve, with their names: "rated", "smallest flow", "normal flow", "largest flow"."""
     water: str
     """Why there is no curve in water to judge efficiency and specific speed by; empty where there is one."""
-    all_bids: tuple[Bid, ...]
-    """The latest revision of every bid of the inquiry, this one included; one tuple shared by all cases."""
     assumptions: tuple[Assumption, ...]
+    bids: "tuple[Case, ...]" = ()
+    """Every bid of the inquiry prepared alike, this one included, for comparisons between bids; one tuple shared by
+    all cases. Empty where a bid is looked at alone."""

@@ -11,7 +11,7 @@ from typing import Literal
 CLOSE = 0.01
 """How near a factor must be to the gap to explain it. Source: common practice, no source; methods use 1 %."""
 
-Quantity = Literal["flow", "head", "power"]
+Quantity = Literal["flow", "head", "power", "efficiency"]
 
 
 @dataclass(frozen=True, slots=True)
@@ -124,10 +124,13 @@ def motor_mistakes(motor_efficiency: float | None) -> tuple[Mistake, ...]:
     """Motor input stated in place of shaft power; only with the efficiency of the motor offered."""
     if motor_efficiency is None:
         return ()
-    return (Mistake("power", 1.0 / motor_efficiency, "power is motor input, not shaft power"),)
+    return (
+        Mistake("power", 1.0 / motor_efficiency, "power is motor input, not shaft power"),
+        Mistake("efficiency", motor_efficiency, "efficiency is that of pump and motor together"),
+    )
 
 
-BALANCE: dict[Quantity, int] = {"flow": 1, "head": 1, "power": -1}
+BALANCE: dict[Quantity, int] = {"flow": 1, "head": 1, "power": -1, "efficiency": -1}
 """How ρgQH/(Pη) depends on each quantity."""
 
 

@@ -89,6 +89,17 @@ class Limits:
     duty_head: Limit = named(Kind.SHARE, "head at rated flow over rated head")
     duty_head_floor: Limit = named(Kind.SHARE, "head at rated flow over rated head, below which the duty is not met")
     rated_over_bep: Limit = named(Kind.WHOLE_SHARE, "rated flow over best efficiency flow, at the diameter offered")
+    efficiency_peers: Limit = named(
+        Kind.POINTS, "best efficiency over what is expected of it, against the middle of the other bids"
+    )
+    efficiency_shape: Limit = named(
+        Kind.POINTS, "efficiency at 75 and 110 % of best efficiency flow over the best, beyond what is expected"
+    )
+    efficiency_shape_far: Limit = named(Kind.POINTS, "the same, from where it is asked about")
+    minimum_efficiency_index: Limit = named(Kind.RATIO, "minimum efficiency index of the European regulation")
+    us_power_ratio: Limit = named(
+        Kind.SHARE, "shaft power over that of the least efficient pump the United States rule allows"
+    )
     npsh_margin: Limit = named(Kind.NPSH, "NPSH available less NPSH3")
     npsh_ratio: Limit = named(Kind.RATIO, "NPSH available over NPSH3")
     npsh_margin_raised: Limit = named(
@@ -110,7 +121,32 @@ class Limits:
         Kind.SUCTION_SPECIFIC_SPEED, "suction specific speed at best efficiency, maximum diameter"
     )
     suction_specific_speed_high: Limit = named(Kind.SUCTION_SPECIFIC_SPEED, "suction specific speed without an inducer")
+    nss_credible: Limit = named(
+        Kind.SUCTION_SPECIFIC_SPEED, "suction specific speed a claimed NPSH3 implies, without an inducer"
+    )
+    nss_sound: Limit = named(
+        Kind.SUCTION_SPECIFIC_SPEED, "suction specific speed a claimed NPSH3 implies, below which it is poor or wrong"
+    )
+    npsh_fall: Limit = named(Kind.SHARE, "fall of NPSH3 with rising flow above 60 % of best efficiency flow")
+    npsh_growth: Limit = named(Kind.RATIO, "exponent of flow with which NPSH3 rises beyond best efficiency")
+    head_coefficient: Limit = named(Kind.RATIO, "head coefficient over that expected for the specific speed")
+    head_coefficient_far: Limit = named(Kind.RATIO, "the same, from where it is asked about without a likely cause")
+    tip_speed: Limit = named(Kind.TIP_SPEED, "speed of the impeller's outer edge, up to which grey cast iron is usual")
     shutoff_droop: Limit = named(Kind.SHARE, "fall of the head curve towards shutoff over shutoff head")
+    shutoff_head_ordinary: Limit = named(Kind.WHOLE_SHARE, "shutoff head over head at best efficiency, always in order")
+    shutoff_head_shape: Limit = named(
+        Kind.RATIO, "shutoff head over head at best efficiency, over what is expected for the specific speed"
+    )
+    shutoff_power_ordinary: Limit = named(
+        Kind.WHOLE_SHARE, "shutoff power over power at best efficiency, always in order"
+    )
+    shutoff_power_shape: Limit = named(
+        Kind.RATIO, "shutoff power over power at best efficiency, over what is expected for the specific speed"
+    )
+    same_hydraulics: Limit = named(Kind.SHARE, "head of two bids brought to one speed, within which they are one pump")
+    same_hydraulics_efficiency: Limit = named(
+        Kind.POINTS, "best efficiency claimed above that of a bid with the same curves"
+    )
 
     def all(self) -> tuple[Limit, ...]:
         """Every limit in force, in the order of the register."""

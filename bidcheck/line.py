@@ -1,5 +1,7 @@
 """The whole line, from an inquiry with its bids to the evaluation. The first file to read."""
 
+from dataclasses import replace
+
 from bidcheck import __version__
 from bidcheck.case import Case
 from bidcheck.checks import ALL
@@ -22,9 +24,9 @@ def evaluate(inquiry: Inquiry) -> Evaluation:
     Evaluation
         Bids in the order of their names.
     """
-    latest = inquiry.latest_bids()
-    cases = [prepare(inquiry, bid, latest) for bid in latest]
-    return Evaluation(inquiry=inquiry, bids=tuple(judged(case) for case in cases), version=__version__)
+    cases = tuple(prepare(inquiry, bid) for bid in inquiry.latest_bids())
+    together = [replace(case, bids=cases) for case in cases]
+    return Evaluation(inquiry=inquiry, bids=tuple(judged(case) for case in together), version=__version__)
 
 
 def judged(case: Case) -> BidEvaluation:

@@ -6,10 +6,11 @@ from pathlib import Path
 
 ORDER: tuple[tuple[str, ...], ...] = (
     ("errors", "quantity", "numerals", "unit_table", "unit_refusals", "units"),
-    ("arrangement", "curve", "limits", "bid", "inquiry", "case", "finding", "evaluation"),
+    ("arrangement", "curve", "limits", "bid", "inquiry", "second_opinion", "case", "finding", "evaluation"),
     ("hydraulics",),
     ("estimates", "fit", "guarantee", "explain"),
     ("basis",),
+    ("appraise",),
     ("prepare",),
     ("checks",),
     ("money",),

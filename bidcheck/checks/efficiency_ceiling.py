@@ -20,7 +20,7 @@ ORIGIN = "disc friction (Daily and Nece), leakage (Gülich), hydraulic efficienc
 def run(case: Case) -> Iterator[Measured]:
     """Compare best efficiency with the loss ceiling."""
     estimate, claim = case.estimates.efficiency, case.estimates.offered_efficiency
-    if case.water and case.curve is not None:
+    if case.water and not case.estimates.corrected and case.curve is not None:
         yield asked("best efficiency", "water curve")
         return
     if estimate is None or claim is None:

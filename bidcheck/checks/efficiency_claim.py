@@ -3,18 +3,28 @@
 The efficiency of the bidder's curve at best efficiency is held against estimates that do not come from the bidder:
 the middle of the surveyed market of its class, and what a published chart calls practically attainable. A claim
 above the attainable asks for a test; one far above it is called implausible. A low claim is poor for its class or
-stated on another basis; what trimming may have cost is given to the bidder there. No such estimate can show an
-overstatement of 3 points; 5 seldom, 8 mostly, 10 nearly always.
+stated on another basis; what trimming may have cost is given to the bidder there, and where losses of motor or
+frequency converter would explain it, that is said before anything else. A curve brought to water from a viscous liquid
+is never more than a remark. No such estimate can show an overstatement of 3 points; 5 seldom, 8 mostly, 10 nearly
+always.
 """
 
 from collections.abc import Iterator
 
-from bidcheck.case import Case, EfficiencyEstimate
+from bidcheck.case import Case
 from bidcheck.checks.evidence import points, share, specific_speed, text
 from bidcheck.checks.request import asked, not_applicable
+from bidcheck.explain import in_words
 from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
+from bidcheck.hydraulics.driver import motor_efficiency
 from bidcheck.limits import Limit, Mark, within
 from bidcheck.quantity import Kind
+from bidcheck.second_opinion import EfficiencyEstimate
+
+CONVERTER = 0.97
+"""Efficiency of a frequency converter near full load. Source: common practice, no source."""
+SMALLEST_MOTOR, LARGEST_MOTOR = 750.0, 200e3
+"""Range of the standard for motor efficiency [W]; its ends serve beyond. Source: IEC 60034-30-1."""
 
 CHART = "Hydraulic Institute chart of attainable efficiency, clean cold water"
 
@@ -33,7 +43,7 @@ TEST_CERTIFICATE = (
 def run(case: Case) -> Iterator[Measured]:
     """Place the efficiency at best efficiency among the independent estimates."""
     estimate, claim = case.estimates.efficiency, case.estimates.offered_efficiency
-    if case.water and case.curve is not None:
+    if case.water and not case.estimates.corrected and case.curve is not None:
         yield asked("best efficiency", "water curve")
     elif estimate is None or claim is None:
         yield asked("best efficiency", "best efficiency")
@@ -41,6 +51,8 @@ def run(case: Case) -> Iterator[Measured]:
         yield not_applicable("best efficiency", estimate.reason)
     else:
         yield _placed(case, estimate, claim)
+    if case.estimates.corrected:
+        yield asked("water curve", "water curve")
 
 
 def _limit(name: str, at_least: float | None, at_most: float | None, origin: str, mark: Mark) -> Limit:
@@ -50,15 +62,22 @@ def _limit(name: str, at_least: float | None, at_most: float | None, origin: str
 def _placed(case: Case, estimate: EfficiencyEstimate, claim: float) -> Measured:
     """The first step of the ladder that the claim stands on, from the top."""
     high = _above(estimate, claim, _doubt(case))
-    step = high if high is not None else _below(estimate, claim, case.estimates.trim_allowance)
+    low = _below(estimate, claim, case.estimates.trim_allowance) if high is None else None
+    step = high or low
     wording, verdict, limit = step if step is not None else ("", Verdict.PASS, _band(estimate))
+    evidence = _evidence(case, estimate, claim)
+    if low is not None and (causes := losses_that_explain(case, estimate, claim)):
+        evidence["causes"] = text(in_words(causes))
+        wording = f"{wording}, explained"
     if estimate.expected is None:
         wording = f"{wording}, no expected value".removeprefix(", ")
+    if case.estimates.corrected and verdict is Verdict.QUERY:
+        verdict = Verdict.REMARK
     return Measured(
         subject="best efficiency",
         verdict=verdict,
         limit=limit,
-        evidence=_evidence(case, estimate, claim),
+        evidence=evidence,
         wording=wording,
     )
 
@@ -117,6 +136,42 @@ def _below(estimate: EfficiencyEstimate, claim: float, allowance: float) -> tupl
     return None
 
 
+def losses_that_explain(case: Case, estimate: EfficiencyEstimate, claim: float) -> tuple[str, ...]:
+    """Losses of other machines that would put a low claim into the ordinary band, were they counted in it.
+
+    Without a stated motor efficiency that of an IE3 motor of the offered rating is taken.
+    """
+    motor, drive = case.bid.driver, case.bid.drive
+    eta, words = motor.efficiency, "the efficiency of the motor offered"
+    if eta is None:
+        eta, words = _ordinary_motor(case), "the efficiency of an ordinary motor of this size"
+    low, high = estimate.remark_below, estimate.remark_above
+    if eta is None or low is None or high is None:
+        return ()
+    allowance = case.estimates.trim_allowance
+    kinds = [(eta, f"efficiency is that of pump and motor together ({words}, {100 * eta:.1f} %)")]
+    if drive == "variable":
+        both = f"efficiency is wire to water, motor and converter included ({words} and 97 %)"
+        kinds.append((eta * CONVERTER, both))
+    return tuple(said for share_kept, said in kinds if low - allowance <= claim / share_kept <= high)
+
+
+def _ordinary_motor(case: Case) -> float | None:
+    """Efficiency of an IE3 motor for the power at rated flow; None outside the standard."""
+    rating = case.bid.driver.rating or (case.at_duty.power or 0.0) * 1.1
+    if rating <= 0:
+        return None
+    return motor_efficiency(min(max(rating, SMALLEST_MOTOR), LARGEST_MOTOR), _poles(case))
+
+
+def _poles(case: Case) -> int:
+    """Poles of the driver, as stated or as speed has them, within those the standard covers."""
+    stated = case.bid.driver.poles
+    if stated in (2, 4, 6):
+        return stated
+    return min((2, 4, 6), key=lambda poles: abs(case.bid.speed_rpm - 6600.0 / poles))
+
+
 def _evidence(case: Case, estimate: EfficiencyEstimate, claim: float) -> dict[str, Evidence]:
     """The whole picture: claim, expected, attainable, distance, place in the market, specific speed."""
     found: dict[str, Evidence] = {"claim": share(claim)}
@@ -165,6 +220,15 @@ CHECK = Check(
         "low": Wording(
             f"Best efficiency {{claim}} is low for this size and specific speed: {MIDDLE}, about the worst tenth of the"
             " surveyed market."
+        ),
+        "low, explained": Wording(
+            f"Best efficiency {{claim}} is low for this size and specific speed: {MIDDLE}, about the worst tenth of the"
+            " surveyed market. Something else would explain it: {causes}."
+        ),
+        "very low, explained": Wording(
+            f"Best efficiency {{claim}} is very low for a pump alone: {MIDDLE}. Likely cause: {{causes}}.",
+            "Your curve peaks at {claim}. It looks as if {causes}. Please confirm, and state the efficiency of the pump"
+            " alone at shaft power.",
         ),
         "very low": Wording(
             f"Best efficiency {{claim}} is very low for this size and specific speed: {MIDDLE}.",

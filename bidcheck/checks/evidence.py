@@ -60,6 +60,21 @@ def suction_specific_speed(value: float) -> Evidence:
     return Evidence(value, Kind.SUCTION_SPECIFIC_SPEED)
 
 
+def diameter(value: float) -> Evidence:
+    """Diameter [m]."""
+    return Evidence(value, Kind.DIAMETER)
+
+
+def speed(value: float) -> Evidence:
+    """Rotational speed [1/min]."""
+    return Evidence(value, Kind.SPEED)
+
+
+def tip_speed(value: float) -> Evidence:
+    """Tip speed [m/s]."""
+    return Evidence(value, Kind.TIP_SPEED)
+
+
 def text(value: str) -> Evidence:
     """Words."""
     return Evidence(value, Kind.TEXT)

@@ -102,9 +102,9 @@ def _doubt(fit: Fit, flow: float) -> float:
 
 def _mistakes(case: Case, column: Column, gap: float) -> tuple[str, ...]:
     """The single mistakes that would put the claim on the curve."""
-    if column not in ("head", "power"):
+    if column == "npsh3":
         return ()
-    quantity: Quantity = "head" if column == "head" else "power"
+    quantity: Quantity = column
     bid = case.bid
     return mistakes_that_close(
         gap,

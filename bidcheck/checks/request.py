@@ -13,6 +13,7 @@ Item = Literal[
     "efficiency or power",
     "efficiency",
     "best efficiency",
+    "efficiency beside best efficiency",
     "NPSH3 at rated flow",
     "NPSH3 at best efficiency",
     "NPSH3 at the largest flow",
@@ -40,6 +41,9 @@ REQUESTS: dict[Item, str] = {
     "best efficiency": (
         "Please send the efficiency curve at the offered diameter to beyond best efficiency, and state the"
         " best efficiency flow."
+    ),
+    "efficiency beside best efficiency": (
+        "Please send efficiency against flow from three quarters of best efficiency flow to beyond 110 % of it."
     ),
     "NPSH3 at rated flow": "Please state NPSH3 at rated flow, for cold water, without reduction for other liquids.",
     "NPSH3 at best efficiency": "Please send NPSH3 against flow to beyond best efficiency flow.",

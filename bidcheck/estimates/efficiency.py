@@ -9,13 +9,13 @@ import math
 from typing import NamedTuple
 
 from bidcheck.arrangement import Arrangement
-from bidcheck.case import EfficiencyEstimate
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates.expected import MULTISTAGE, expected_efficiency
 from bidcheck.estimates.loss_ceiling import LossBalance
 from bidcheck.estimates.shape import Shape, attainable_of, ceiling_of
 from bidcheck.estimates.sources import efficiency_sources
 from bidcheck.hydraulics.ranges import inside, require_positive
+from bidcheck.second_opinion import EfficiencyEstimate
 
 LEAST_FLOW = 6.0
 """Flow below which nothing is judged [m³/h]. Source: scope of Regulation (EU) No 547/2012."""
@@ -35,6 +35,34 @@ SMALL_FLOW, NARROW_NQ = 18.0, 12.0
 """Below this flow [m³/h] or specific speed a low efficiency is ordinary. Source: common practice, no source."""
 
 _LENIENT: tuple[Arrangement, ...] = ("solids handling", "sealless", "vertical turbine", *MULTISTAGE)
+
+
+def error_of_estimate(expected: float) -> float:
+    """Error of the expected efficiency on one honest pump, on the high side.
+
+    Parameters
+    ----------
+    expected : float
+        c. [fraction]
+
+    Returns
+    -------
+    float
+        The larger of 2.5 points and 0.15 of 1 − c. [fraction]
+
+    Notes
+    -----
+    Not the spread of merit between the pumps of a market, which is about twice as wide.
+    Source: scatter of the published sources about one another
+    Valid for: fractions
+    Mark: derived
+
+    Examples
+    --------
+    >>> error_of_estimate(0.80), error_of_estimate(0.88)
+    (0.03, 0.025)
+    """
+    return max(LEAST_ERROR, ERROR_SHARE * (1.0 - expected))
 
 
 class Thresholds(NamedTuple):
@@ -75,7 +103,7 @@ def claim_thresholds(expected: float | None, attainable: float | None, spread: f
     implausible = None if attainable is None else attainable + IMPLAUSIBLE_SHARE * (1.0 - attainable)
     if expected is None:
         return Thresholds(implausible, None, None, None)
-    high = expected + REMARK_HIGH_Z * max(LEAST_ERROR, ERROR_SHARE * (1.0 - expected))
+    high = expected + REMARK_HIGH_Z * error_of_estimate(expected)
     if spread is None:
         return Thresholds(implausible, high, None, None)
     return Thresholds(implausible, high, expected - REMARK_LOW_Z * spread, expected - QUERY_LOW_Z * spread)

@@ -1,27 +1,18 @@
 """Every independent source of efficiency for one duty, each with its value or the reason why it gives none."""
 
-from collections.abc import Callable, Mapping
+from collections.abc import Callable
 
-from bidcheck.arrangement import Arrangement
-from bidcheck.case import Source
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates import context, guelich
 from bidcheck.estimates.expected import MULTISTAGE, Expected
 from bidcheck.estimates.market_surface import market_efficiency, nominal_flow
 from bidcheck.estimates.shape import Shape, attainable_of, balance_of, ceiling_of, table_of
-from bidcheck.estimates.us_rule import UsClass, outside_us_scope, us_minimum_efficiency, us_nominal_speed
+from bidcheck.estimates.us_rule import US_CLASS, outside_us_scope, us_minimum_efficiency, us_nominal_speed
 from bidcheck.hydraulics.affinity import flow_at_speed, head_at_speed
+from bidcheck.second_opinion import Source
 
 FLOOR_MEI = 0.40
 """Minimum efficiency index required since 2015. Source: Regulation (EU) No 547/2012, Annex II."""
-
-_US_CLASS: Mapping[Arrangement, UsClass] = {
-    "end suction": "ESFM",
-    "close coupled": "ESCC",
-    "in-line": "IL",
-    "vertical multistage": "RSV",
-    "submersible multistage": "ST",
-}
 
 _EU = "Regulation (EU) No 547/2012, Annex III"
 _EU_RANGE = "6 to 1000 m³/h at 1450 or 2900 rpm, nq 8 to 80; market surveyed before the 2015 floor"
@@ -74,7 +65,7 @@ def _market_sources(shape: Shape, expected: Expected) -> list[Source]:
 
 def _us_source(shape: Shape) -> list[Source]:
     """Least efficiency of the US rule, where a class of it fits."""
-    us_class = _US_CLASS.get(shape.arrangement)
+    us_class = US_CLASS.get(shape.arrangement)
     if us_class is None or (shape.stages > 1 and shape.arrangement not in MULTISTAGE):
         return []
     nominal = us_nominal_speed(shape.speed_rpm)

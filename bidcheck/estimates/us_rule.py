@@ -1,8 +1,10 @@
 """Minimum efficiency of clean-water pumps in the United States: 10 CFR 431 Subpart Y."""
 
 import math
+from collections.abc import Mapping
 from typing import Literal
 
+from bidcheck.arrangement import Arrangement
 from bidcheck.hydraulics.ranges import require_inside
 from bidcheck.hydraulics.specific_speed import FOOT, US_GALLON, specific_speed_us
 
@@ -22,6 +24,15 @@ US_CONSTANTS: dict[tuple[UsClass, int], float] = {
     ("ST", 1800): 138.78,
     ("ST", 3600): 134.85,
 }
+
+US_CLASS: Mapping[Arrangement, UsClass] = {
+    "end suction": "ESFM",
+    "close coupled": "ESCC",
+    "in-line": "IL",
+    "vertical multistage": "RSV",
+    "submersible multistage": "ST",
+}
+"""Class of the rule by arrangement. Source: 10 CFR 431.462, definitions."""
 
 M3S_PER_GPM = US_GALLON / 60.0
 """US gallon per minute [m³/s]. Derived from the definition of the US gallon."""

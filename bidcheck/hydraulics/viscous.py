@@ -153,6 +153,61 @@ def viscous_factors(viscosity: float, flow: float, head_per_stage: float, speed_
     return ViscousFactors(B, C_Q, C_eta)
 
 
+class WaterPoint(NamedTuple):
+    """Best efficiency point with water: flow [m³/s], head of one stage [m], efficiency; and the factors behind it."""
+
+    flow: float
+    head_per_stage: float
+    efficiency: float
+    factors: ViscousFactors
+
+
+def water_point(
+    viscosity: float, flow: float, head_per_stage: float, efficiency: float, speed_rpm: float
+) -> WaterPoint:
+    """Best efficiency point with water from that with a viscous liquid.
+
+    Parameters
+    ----------
+    viscosity : float
+        Kinematic viscosity of the liquid pumped. [m²/s]
+    flow, head_per_stage, efficiency : float
+        Best efficiency point as pumped, head of one stage. [m³/s, m, fraction]
+    speed_rpm : float
+        Rotational speed. [1/min]
+
+    Returns
+    -------
+    WaterPoint
+
+    Raises
+    ------
+    OutOfRange
+        Outside the limits of `viscous_factors`, or where water would need an efficiency of 1 or more.
+
+    Notes
+    -----
+    The factors belong to the point with water, so they are found by repetition: Q_w = Q/C_Q, H_w = H/C_Q, η_w = η/C_η.
+    Source: ANSI/HI 9.6.7, used backwards
+    Valid for: as `viscous_factors`
+    Mark: derived
+
+    Examples
+    --------
+    >>> point = water_point(120e-6, 103.15 / 3600, 72.21, 0.5018, speed_rpm=2950)
+    >>> round(3600 * point.flow), round(point.head_per_stage), round(point.efficiency, 2)
+    (110, 77, 0.68)
+    """
+    Q, H = flow, head_per_stage
+    factors = viscous_factors(viscosity, Q, H, speed_rpm)
+    for _ in range(60):
+        Q, H = flow / factors.flow, head_per_stage / factors.flow
+        factors = viscous_factors(viscosity, Q, H, speed_rpm)
+    if efficiency >= factors.efficiency:
+        raise OutOfRange(f"efficiency {efficiency:.3g} as pumped would need more than 100 % with water")
+    return WaterPoint(Q, H, efficiency / factors.efficiency, factors)
+
+
 def viscous_head_factor(flow_factor: float, flow_over_bep: Floats) -> Floats:
     """Factor of head along the curve.
 

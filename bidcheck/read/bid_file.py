@@ -70,6 +70,7 @@ def read_bid_table(top: Table, place: Place, liquid_density: float | None, read_
         **diameters,
         "title": top.text("title") or "",
         "model": top.text("model") or "",
+        "impeller_material": top.text("impeller_material") or "",
         "suction_eyes": _suction_eyes(top, arrangement),
         "inducer": bool(top.flag("inducer")),
         "drive": top.word("drive", _DRIVES) or "fixed",

@@ -5,7 +5,7 @@ import math
 from collections.abc import Mapping
 from typing import Any
 
-from bidcheck.case import AtFlow, EfficiencyEstimate, Estimates, Source
+from bidcheck.case import AtFlow
 from bidcheck.curve import COLUMN_KINDS, COLUMNS, Fit, Fits
 from bidcheck.evaluation import BidEvaluation, Evaluation
 from bidcheck.finding import Evidence, Finding
@@ -13,6 +13,15 @@ from bidcheck.inquiry import Inquiry
 from bidcheck.limits import Limit
 from bidcheck.quantity import Assumption, Kind
 from bidcheck.report.words import message, question
+from bidcheck.second_opinion import (
+    EfficiencyEstimate,
+    Estimates,
+    ImpellerEstimate,
+    RegulationEstimate,
+    ShapeEstimate,
+    Source,
+    SuctionEstimate,
+)
 from bidcheck.units import from_si
 
 SCHEMA = "bidcheck/evaluation/1"
@@ -188,7 +197,76 @@ def _fit(fit: Fit | None) -> dict[str, Any] | None:
 def _estimates(estimates: Estimates) -> dict[str, Any]:
     return {
         "efficiency": _efficiency(estimates.efficiency, estimates.offered_efficiency),
-        "npsh3": {"expected_m": _in(estimates.npsh3_expected, Kind.NPSH)},
+        "head_coefficient": _impeller(estimates.impeller),
+        "shape": _shape(estimates.shape),
+        "npsh3": _npsh3(estimates.suction),
+        "regulation": _regulation(estimates.regulation),
+    }
+
+
+def _impeller(found: ImpellerEstimate | None) -> dict[str, Any] | None:
+    """Head coefficients and diameters, offered and expected."""
+    if found is None:
+        return None
+    return {
+        "offered": _in(found.offered, Kind.RATIO),
+        "expected": _in(found.expected, Kind.RATIO),
+        "offered_over_expected": _in(found.ratio, Kind.RATIO),
+        "offered_at_shutoff": _in(found.offered_at_shutoff, Kind.RATIO),
+        "expected_at_shutoff": _in(found.expected_at_shutoff, Kind.RATIO),
+        "diameter_mm": _in(found.diameter, Kind.DIAMETER),
+        "expected_diameter_mm": _in(found.expected_diameter, Kind.DIAMETER),
+        "cordier_diameter_mm": _in(found.cordier_diameter, Kind.DIAMETER),
+        "tip_speed_ms": _in(found.tip_speed, Kind.TIP_SPEED),
+        "sources": [_source(source) for source in found.sources],
+    }
+
+
+def _shape(found: ShapeEstimate | None) -> dict[str, Any] | None:
+    """Ratios to best efficiency, offered and as each source expects them."""
+    if found is None:
+        return None
+    ratios = {
+        "shutoff_head_over_bep": found.shutoff_head,
+        "shutoff_power_over_bep": found.shutoff_power,
+        "efficiency_at_075_over_best": found.part_load,
+        "efficiency_at_110_over_best": found.over_load,
+    }
+    return {
+        name: {
+            "offered": _in(ratio.offered, Kind.RATIO),
+            "sources": [_source(source) for source in ratio.sources],
+        }
+        for name, ratio in ratios.items()
+    }
+
+
+def _npsh3(found: SuctionEstimate | None) -> dict[str, Any] | None:
+    """NPSH3 at best efficiency, offered and of ordinary impellers."""
+    if found is None:
+        return None
+    return {
+        "offered_m": _in(found.offered, Kind.NPSH),
+        "expected_m": _in(found.ordinary, Kind.NPSH),
+        "ordinary_from_m": _in(found.low, Kind.NPSH),
+        "ordinary_to_m": _in(found.high, Kind.NPSH),
+        "growth_exponent": _in(found.growth, Kind.RATIO),
+        "sources": [_source(source) for source in found.sources],
+    }
+
+
+def _regulation(found: RegulationEstimate | None) -> dict[str, Any] | None:
+    """The curve against both regulations, whether or not the inquiry names them."""
+    if found is None:
+        return None
+    return {
+        "eu_class": found.eu_class,
+        "eu_minimum_efficiency_index": _in(found.eu_index, Kind.RATIO),
+        "eu_load_points": found.eu_points,
+        "eu_reason": found.eu_reason,
+        "us_class": found.us_class,
+        "us_power_over_allowed": _in(found.us_ratio, Kind.SHARE),
+        "us_reason": found.us_reason,
     }
 
 
@@ -221,7 +299,8 @@ def _efficiency(estimate: EfficiencyEstimate | None, offered: float | None) -> d
 def _source(source: Source) -> dict[str, Any]:
     return {
         "name": source.name,
-        "value": _in(source.value, Kind.SHARE),
+        "value": _in(source.value, source.kind),
+        "unit": source.kind.json_unit or source.kind.suffix,
         "valid": source.valid,
         "reason": source.reason,
         "mark": source.mark,

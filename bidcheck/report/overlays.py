@@ -6,6 +6,7 @@ from typing import TYPE_CHECKING, NamedTuple
 import numpy as np
 
 from bidcheck.checks.npsh_margin import is_raised, margins
+from bidcheck.estimates.efficiency import error_of_estimate
 from bidcheck.evaluation import Evaluation
 from bidcheck.inquiry import Duty
 from bidcheck.limits import Limits
@@ -16,10 +17,8 @@ from bidcheck.report.drawing import HALO, Look, converted, look, one, spread
 if TYPE_CHECKING:
     from matplotlib.axes import Axes
 
-    from bidcheck.case import EfficiencyEstimate
+    from bidcheck.second_opinion import EfficiencyEstimate
 
-ERROR_FLOOR, ERROR_SHARE = 0.025, 0.15
-"""Half width of the independent band: the larger of 2.5 points and 0.15 of the losses. Source: derived, see methods."""
 BESIDE = 0.016
 """Least distance of two bands, as a share of the axis of flow."""
 
@@ -47,7 +46,7 @@ def draw_estimates(axes: "Axes", evaluation: Evaluation, system: UnitSystem) -> 
     places = spread([item.flow for item in estimated], BESIDE * (right - left))
     for x, (_, estimate, how) in zip(places, estimated, strict=True):
         if estimate.expected is not None:
-            half = max(ERROR_FLOOR, ERROR_SHARE * (1.0 - estimate.expected))
+            half = error_of_estimate(estimate.expected)
             low, high = 100 * (estimate.expected - half), 100 * (estimate.expected + half)
             axes.plot([x, x], [low, high], color=how.colour, linewidth=6, alpha=0.35, solid_capstyle="butt", zorder=2)
             axes.plot([x], [low - 1.4], marker=how.marker, markersize=3.5, color=how.colour, zorder=5)

@@ -4,7 +4,6 @@ import re
 from dataclasses import dataclass, replace
 from typing import Any
 
-from bidcheck.case import Source
 from bidcheck.evaluation import BidEvaluation, Evaluation
 from bidcheck.finding import Finding, Verdict
 from bidcheck.limits import Limit, limit_names
@@ -26,6 +25,7 @@ from bidcheck.report.words import (
     message,
     question,
 )
+from bidcheck.second_opinion import Source
 
 PLURAL = {Verdict.FAIL: "fails", Verdict.QUERY: "queries", Verdict.REMARK: "remarks"}
 
@@ -240,7 +240,7 @@ def _estimate(bid: BidEvaluation, system: UnitSystem) -> dict[str, Any]:
         "offered": figure(offered, Kind.SHARE, system),
         "nq": figure(estimates.nq, Kind.SPECIFIC_SPEED, system),
         "nss": figure(estimates.nss, Kind.SUCTION_SPECIFIC_SPEED, system),
-        "npsh3": figure(estimates.npsh3_expected, Kind.NPSH, system),
+        "npsh3": figure(estimates.suction.ordinary if estimates.suction else None, Kind.NPSH, system),
         "market": figure(below, Kind.WHOLE_SHARE, system),
         "basis": estimates.basis,
         "reason": estimate.reason if estimate is not None else "",

@@ -14,7 +14,10 @@ LOUD = (Verdict.REMARK, Verdict.QUERY, Verdict.FAIL, Verdict.NO_DATA)
 
 COOLING_WATER = {
     "alder": (Outcome.ACCEPTABLE, set()),
-    "birch": (Outcome.ACCEPTABLE_AFTER_QUERIES, {("efficiency-claim", Verdict.QUERY)}),
+    "birch": (
+        Outcome.ACCEPTABLE_AFTER_QUERIES,
+        {("efficiency-claim", Verdict.QUERY), ("efficiency-peers", Verdict.REMARK)},
+    ),
     "cedar": (Outcome.ACCEPTABLE_AFTER_QUERIES, {("bep-match", Verdict.QUERY)}),
     "dogwood": (Outcome.NOT_ACCEPTABLE, {("npsh-margin", Verdict.FAIL)}),
     "elm": (Outcome.ACCEPTABLE_AFTER_QUERIES, {("power-balance", Verdict.QUERY), ("odd-point", Verdict.QUERY)}),
@@ -27,10 +30,15 @@ BOILER_FEED = {
             ("curve-stability", Verdict.REMARK),
             ("missing-data", Verdict.NO_DATA),
             ("npsh-margin", Verdict.NO_DATA),
+            ("npsh-claim", Verdict.NO_DATA),
+            ("npsh-form", Verdict.NO_DATA),
             ("suction-specific-speed", Verdict.NO_DATA),
         },
     ),
-    "larch": (Outcome.ACCEPTABLE_AFTER_QUERIES, {("suction-specific-speed", Verdict.QUERY)}),
+    "larch": (
+        Outcome.ACCEPTABLE_AFTER_QUERIES,
+        {("npsh-claim", Verdict.QUERY), ("suction-specific-speed", Verdict.QUERY)},
+    ),
 }
 
 

@@ -1,0 +1,126 @@
+"""Head, diameter, speed and stages of the bid belong to one impeller.
+
+What head an impeller of a diameter and speed makes is a narrow matter: the head coefficient follows specific speed and
+scatters by a fifth. A bid outside that has one of its figures on another basis: stages, diameter in inches, a curve of
+another speed. Each single mistake that would close the gap is named. Without one, only a coefficient far outside is
+asked about. Diameters by the head coefficient and by the Cordier line are shown beside the one offered. A stage too
+many or too few among six changes the coefficient by a sixth and is not seen here.
+"""
+
+from collections.abc import Iterator
+
+from bidcheck.case import Case
+from bidcheck.checks.evidence import diameter, ratio, specific_speed, text
+from bidcheck.checks.impeller_causes import Figures, likely_causes
+from bidcheck.checks.request import Item, asked, not_applicable
+from bidcheck.checks.unlike import at_most_remark
+from bidcheck.checks.verdicts import missed
+from bidcheck.explain import in_words
+from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
+from bidcheck.limits import within
+from bidcheck.second_opinion import ImpellerEstimate
+
+
+def run(case: Case) -> Iterator[Measured]:
+    """Compare the head coefficient at best efficiency with the expected one."""
+    impeller = case.estimates.impeller
+    if impeller is None:
+        missing: Item = "water curve" if case.water and case.curve is not None else "best efficiency"
+        yield asked("best efficiency", missing)
+    elif impeller.diameter is None:
+        yield asked("best efficiency", "impeller diameters")
+    elif impeller.ratio is None:
+        reason = next(source.reason for source in impeller.sources if source.value is None)
+        yield not_applicable("best efficiency", reason)
+    else:
+        yield _placed(case, impeller, impeller.ratio)
+
+
+def _placed(case: Case, impeller: ImpellerEstimate, found: float) -> Measured:
+    """The coefficient against what is plausible, and the mistake that would explain it."""
+    limits, evidence = case.inquiry.limits, _evidence(case, impeller, found)
+    compared = within(found, limits.head_coefficient)
+    if compared.holds:
+        return Measured(subject="best efficiency", holds=compared, evidence=evidence)
+    far = within(found, limits.head_coefficient_far)
+    limit = limits.head_coefficient if far.holds else limits.head_coefficient_far
+    causes = likely_causes(_figures(case, impeller), case.bid)
+    if causes:
+        evidence["causes"] = text(in_words(causes))
+    elif far.holds:
+        return Measured(
+            subject="best efficiency",
+            verdict=missed(limit, Verdict.REMARK),
+            limit=limit,
+            evidence=evidence,
+            wording="off",
+        )
+    return Measured(
+        subject="best efficiency",
+        verdict=at_most_remark(case.bid, missed(limit, Verdict.QUERY)) if not causes or far.holds else Verdict.QUERY,
+        limit=limit,
+        evidence=evidence,
+        wording="explained" if causes else "far",
+    )
+
+
+def _figures(case: Case, impeller: ImpellerEstimate) -> Figures:
+    """The figures behind the coefficient."""
+    best = case.max_fits.bep if case.max_fits is not None else None
+    assert best is not None
+    assert best.head is not None
+    assert impeller.diameter is not None
+    bid = case.bid
+    return Figures(best.flow / bid.suction_eyes, best.head, bid.speed_rpm, impeller.diameter, bid.stages)
+
+
+def _evidence(case: Case, impeller: ImpellerEstimate, found: float) -> dict[str, Evidence]:
+    """Coefficients, diameters, specific speed."""
+    assert impeller.offered is not None
+    assert impeller.expected is not None
+    assert impeller.diameter is not None
+    assert impeller.expected_diameter is not None
+    evidence = {
+        "offered": ratio(impeller.offered),
+        "expected": ratio(impeller.expected),
+        "over_expected": ratio(found),
+        "diameter": diameter(impeller.diameter),
+        "expected_diameter": diameter(impeller.expected_diameter),
+    }
+    if impeller.cordier_diameter is not None:
+        evidence["cordier_diameter"] = diameter(impeller.cordier_diameter)
+    if case.estimates.nq_eye is not None:
+        evidence["nq_eye"] = specific_speed(case.estimates.nq_eye)
+    return evidence
+
+
+CHECK = Check(
+    name="head-coefficient",
+    group="hydraulics",
+    run=run,
+    otherwise=Verdict.QUERY,
+    limits=("head_coefficient", "head_coefficient_far"),
+    source="Gülich, Centrifugal Pumps, equation 3.26; Cordier (1953) beside it",
+    wordings={
+        "": Wording(
+            "Head coefficient {offered} at best efficiency agrees with {expected} expected; {diameter} offered,"
+            " {expected_diameter} expected."
+        ),
+        "off": Wording(
+            "Head coefficient {offered} at best efficiency is {over_expected} times the {expected} expected: unusual"
+            " for {diameter}, where {expected_diameter} is expected at this head, flow and speed."
+        ),
+        "far": Wording(
+            "Head coefficient {offered} at best efficiency is {over_expected} times the {expected} expected: {diameter}"
+            " is offered where {expected_diameter} is expected at this head, flow and speed.",
+            "An impeller of {diameter} at your speed and stages does not make the head of your curve; about"
+            " {expected_diameter} is expected. Please confirm diameter, speed, stages and head.",
+        ),
+        "explained": Wording(
+            "Head coefficient {offered} at best efficiency is {over_expected} times the {expected} expected: {diameter}"
+            " is offered where {expected_diameter} is expected. One mistake would explain it: {causes}.",
+            "Your diameter ({diameter}), speed, stages and head do not belong together: about {expected_diameter} is"
+            " expected. It looks as if {causes}. Please confirm and correct.",
+        ),
+    },
+)

@@ -1,0 +1,131 @@
+"""Claimed NPSH3 is one an ordinary impeller eye can show.
+
+NPSH3 at best efficiency, speed and flow per eye make a suction specific speed. Ordinary impellers lie at 7 000 to
+11 000 in US units; a claim that needs more than 13 000 without an inducer is hard to believe without a test, one below
+6 000 is a poor eye or wrong data. Where metres and feet would explain it, that is said. Without NPSH3 at best
+efficiency the figure at rated flow serves, if that is near best efficiency. Whether a high suction specific speed is
+wise to buy is another check.
+"""
+
+from collections.abc import Iterator
+from typing import NamedTuple
+
+from bidcheck.case import Case
+from bidcheck.checks.evidence import flow, npsh, suction_specific_speed, text
+from bidcheck.checks.request import Item, asked, not_applicable
+from bidcheck.checks.unlike import at_most_remark
+from bidcheck.checks.verdicts import missed
+from bidcheck.estimates.npsh3_expected import HIGHEST_NSS, LOWEST_NSS, expected_npsh3
+from bidcheck.explain import FEET
+from bidcheck.finding import Check, Measured, Verdict, Wording
+from bidcheck.hydraulics.specific_speed import suction_specific_speed as nss_of
+from bidcheck.limits import within
+
+NEAR = (0.85, 1.15)
+"""Rated flow over best efficiency flow within which NPSH3 at rated flow may stand for that at best efficiency.
+Source: common practice, no source."""
+
+
+class _Claimed(NamedTuple):
+    """NPSH3 [m], the flow it belongs to [m³/s], and where that is."""
+
+    npsh3: float
+    flow: float
+    where: str
+
+
+def run(case: Case) -> Iterator[Measured]:
+    """Place the suction specific speed that the claim implies."""
+    if case.bid.inducer:
+        yield not_applicable("best efficiency", "an inducer is offered, and the ordinary band is for impellers without")
+        return
+    claimed = _claimed(case)
+    if claimed is None:
+        missing: Item = "water curve" if case.water and case.curve is not None else "NPSH3 at best efficiency"
+        yield asked("best efficiency", missing)
+        return
+    yield _placed(case, claimed)
+
+
+def _claimed(case: Case) -> _Claimed | None:
+    """NPSH3 at best efficiency by the curve, else at rated flow where that is near."""
+    suction, best = case.estimates.suction, case.max_fits.bep if case.max_fits is not None else None
+    if suction is not None and suction.offered is not None and suction.offered > 0 and best is not None:
+        return _Claimed(suction.offered, best.flow, "at best efficiency")
+    at = case.at_duty
+    near = at.flow_over_bep is not None and NEAR[0] <= at.flow_over_bep <= NEAR[1]
+    if near and at.npsh3 is not None and at.npsh3 > 0:
+        return _Claimed(at.npsh3, at.flow, "at rated flow")
+    return None
+
+
+def _placed(case: Case, claimed: _Claimed) -> Measured:
+    """The claim against the credible range, and units that would explain it."""
+    limits, eye_flow = case.inquiry.limits, claimed.flow / case.bid.suction_eyes
+    nss = nss_of(case.bid.speed_rpm, eye_flow, claimed.npsh3)
+    expected = expected_npsh3(case.bid.speed_rpm, eye_flow)
+    evidence = {
+        "npsh3": npsh(claimed.npsh3),
+        "flow": flow(claimed.flow),
+        "where": text(claimed.where),
+        "nss": suction_specific_speed(nss),
+        "ordinary_from": npsh(expected.low),
+        "ordinary_to": npsh(expected.high),
+    }
+    high, low = within(nss, limits.nss_credible), within(nss, limits.nss_sound)
+    if high.holds and low.holds:
+        return Measured(subject="best efficiency", holds=high, evidence=evidence)
+    limit, wording = (limits.nss_credible, "low") if not high.holds else (limits.nss_sound, "high")
+    cause = _units(nss, too_low=not high.holds)
+    verdict = missed(limit, Verdict.QUERY)
+    if cause:
+        evidence["cause"] = text(cause)
+        wording, verdict = "explained", Verdict.QUERY
+    return Measured(
+        subject="best efficiency",
+        verdict=at_most_remark(case.bid, verdict),
+        limit=limit,
+        evidence=evidence,
+        wording=wording,
+    )
+
+
+def _units(nss: float, *, too_low: bool) -> str:
+    """Metres and feet mixed up, where that would bring the claim into the ordinary band."""
+    factor = FEET**0.75
+    meant = nss / factor if too_low else nss * factor
+    if not LOWEST_NSS <= meant <= HIGHEST_NSS:
+        return ""
+    return "NPSH3 is in m under a ft heading" if too_low else "NPSH3 is in ft under an m heading"
+
+
+CHECK = Check(
+    name="npsh-claim",
+    group="suction",
+    run=run,
+    otherwise=Verdict.QUERY,
+    limits=("nss_credible", "nss_sound"),
+    source="common practice, no source: ordinary suction specific speeds",
+    wordings={
+        "": Wording(
+            "NPSH3 {npsh3} {where}, {flow}, is what ordinary impellers show ({ordinary_from} to {ordinary_to}; suction"
+            " specific speed {nss})."
+        ),
+        "low": Wording(
+            "NPSH3 {npsh3} {where}, {flow}, is hard to believe without an inducer: ordinary impellers need"
+            " {ordinary_from} to {ordinary_to}. It implies a suction specific speed of {nss}.",
+            "You state NPSH3 {npsh3} {where}, {flow}; ordinary impellers of this speed and flow need {ordinary_from} to"
+            " {ordinary_to}. Please send the NPSH test of this hydraulic, at 3 % head drop, with cold water.",
+        ),
+        "high": Wording(
+            "NPSH3 {npsh3} {where}, {flow}, is poor for this speed and flow, or wrong: ordinary impellers need"
+            " {ordinary_from} to {ordinary_to} (suction specific speed {nss})."
+        ),
+        "explained": Wording(
+            "NPSH3 {npsh3} {where}, {flow}, lies outside what ordinary impellers show, {ordinary_from} to"
+            " {ordinary_to}. One mistake would explain it: {cause}.",
+            "You state NPSH3 {npsh3} {where}, {flow}, where {ordinary_from} to {ordinary_to} is ordinary. It looks as"
+            " if {cause}. Please confirm and correct.",
+        ),
+    },
+)
