@@ -5,8 +5,9 @@ the middle of the surveyed market of its class, and what a published chart calls
 above the attainable asks for a test; one far above it is called implausible. A low claim is poor for its class or
 stated on another basis; what trimming may have cost is given to the bidder there, and where losses of motor or
 frequency converter would explain it, that is said before anything else. A curve brought to water from a viscous liquid
-is never more than a remark. No such estimate can show an overstatement of 3 points; 5 seldom, 8 mostly, 10 nearly
-always.
+is never more than a remark. No such estimate can show an overstatement of 3 points, and 5 seldom; 8 mostly and 10
+nearly always for end suction and double suction pumps at four poles or slower, less often for in-line, small and faster
+ones. docs/validation.md has the figures.
 """
 
 from collections.abc import Iterator

@@ -25,7 +25,7 @@ IMPLAUSIBLE_SHARE = 0.25
 no source."""
 
 REMARK_HIGH_Z, REMARK_LOW_Z, QUERY_LOW_Z = 1.64, 1.28, 2.0
-"""Normal quantiles of one in twenty, one in ten and one in forty-four."""
+"""Normal quantiles of one in twenty, one in ten and one in forty-four. Source: normal distribution."""
 
 LEAST_ERROR, ERROR_SHARE = 0.025, 0.15
 """Error of the expected efficiency on the high side: the larger of 2.5 points and 0.15 of 1 − c. Derived from the

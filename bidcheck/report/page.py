@@ -8,10 +8,12 @@ from bidcheck.evaluation import BidEvaluation, Evaluation
 from bidcheck.finding import Finding, Verdict
 from bidcheck.limits import Limit, limit_names
 from bidcheck.quantity import Kind, UnitSystem
+from bidcheck.report.beside import beside, source_in_words, sources_of
 from bidcheck.report.figures import efficiency_figure, head_figure, npsh_figure, without
 from bidcheck.report.format import figure, plain
 from bidcheck.report.page_template import template
 from bidcheck.report.tabulation import margin_in_words, tabulation
+from bidcheck.report.window_map import off_the_map, window_figure
 from bidcheck.report.words import (
     CAUTION,
     HOW_SHARP,
@@ -25,7 +27,6 @@ from bidcheck.report.words import (
     message,
     question,
 )
-from bidcheck.second_opinion import Source
 
 PLURAL = {Verdict.FAIL: "fails", Verdict.QUERY: "queries", Verdict.REMARK: "remarks"}
 
@@ -78,6 +79,7 @@ def evaluation_page(evaluation: Evaluation, *, system: UnitSystem) -> str:
         table=tabulation(evaluation, system),
         figures=_figures(evaluation, system),
         estimates=[_estimate(bid, system) for bid in evaluation.bids],
+        beside=beside(evaluation, system),
         limits=_limits(evaluation, system),
         mark_words=MARK_WORDS,
         assumptions=inquiry.assumptions,
@@ -218,10 +220,21 @@ def _figures(evaluation: Evaluation, system: UnitSystem) -> list[dict[str, Any]]
             " where that margin is raised for high suction specific speed.",
             without(evaluation, "npsh3"),
         ),
+        (
+            "Specific speed by flow",
+            window_figure(evaluation, system),
+            "Best efficiency point of each bid (maximum diameter where a curve of it is given) by flow and specific"
+            " speed of total flow. The shaded window is where ordinary impellers are built, after the ends of a"
+            " published chart of the Hydraulic Institute; dashed, the nearest reading is held. Grey lines are what the"
+            " chart calls practically attainable. Outside the window a list of like installations is worth asking for,"
+            " no more.",
+            off_the_map(evaluation),
+        ),
     )
     return [
         {"name": name, "svg": Markup(svg), "caption": caption, "without": ", ".join(missing)}
         for name, svg, caption, missing in made
+        if svg
     ]
 
 
@@ -245,19 +258,7 @@ def _estimate(bid: BidEvaluation, system: UnitSystem) -> dict[str, Any]:
         "basis": estimates.basis,
         "reason": estimate.reason if estimate is not None else "",
         "expected_from": estimate.expected_from if estimate is not None else "",
-        "sources": [_source(source, system) for source in (estimate.sources if estimate is not None else ())],
-    }
-
-
-def _source(source: Source, system: UnitSystem) -> dict[str, str]:
-    """One source with its value or why it gives none."""
-    return {
-        "name": source.name,
-        "value": figure(source.value, Kind.SHARE, system),
-        "reason": source.reason,
-        "valid": source.valid,
-        "mark": source.mark,
-        "origin": source.origin,
+        "sources": [source_in_words(quantity, source, system) for quantity, source in sources_of(estimates)],
     }
 
 

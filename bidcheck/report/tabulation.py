@@ -66,7 +66,7 @@ Item = tuple[str, Kind, Value, str, tuple[tuple[str, str], ...]]
 
 def _items(evaluation: Evaluation, system: UnitSystem) -> list[Item]:
     """The items of the tabulation in the order of the job."""
-    return [*_offer(), *_duty(evaluation, system), *_efficiency(), *_suction(evaluation, system)]
+    return [*_offer(), *_duty(evaluation, system), *_efficiency(evaluation, system), *_suction(evaluation, system)]
 
 
 def _offer() -> list[Item]:
@@ -115,7 +115,8 @@ def _duty(evaluation: Evaluation, system: UnitSystem) -> list[Item]:
     ]
 
 
-def _efficiency() -> list[Item]:
+def _efficiency(evaluation: Evaluation, system: UnitSystem) -> list[Item]:
+    limits = evaluation.inquiry.limits
     claim = (("efficiency-claim", "best efficiency"), ("efficiency-ceiling", "best efficiency"))
     balance = (("power-balance", "all points"), ("rated-on-curve", "power at rated flow"))
     return [
@@ -126,6 +127,20 @@ def _efficiency() -> list[Item]:
         ("shaft power at rated flow", Kind.POWER, lambda b: b.case.at_duty.power, "", balance),
         ("driver rating", Kind.POWER, lambda b: b.case.bid.driver.rating, "", ()),
         ("specific speed, total flow", Kind.SPECIFIC_SPEED, lambda b: b.case.estimates.nq, "", ()),
+        (
+            "head coefficient over that expected",
+            Kind.RATIO,
+            lambda b: b.case.estimates.impeller.ratio if b.case.estimates.impeller else None,
+            _words(limits.head_coefficient, system),
+            (("head-coefficient", "best efficiency"),),
+        ),
+        (
+            "tip speed",
+            Kind.TIP_SPEED,
+            lambda b: b.case.estimates.impeller.tip_speed if b.case.estimates.impeller else None,
+            "",
+            (("tip-speed", "impeller"),),
+        ),
     ]
 
 
@@ -133,7 +148,7 @@ def _suction(evaluation: Evaluation, system: UnitSystem) -> list[Item]:
     limits = evaluation.inquiry.limits
     both = (("npsh-margin", "rated"), ("npsh-margin", "largest flow"))
     return [
-        ("NPSH3 at rated flow", Kind.NPSH, lambda b: b.case.at_duty.npsh3, "", ()),
+        ("NPSH3 at rated flow", Kind.NPSH, lambda b: b.case.at_duty.npsh3, "", (("npsh-claim", "best efficiency"),)),
         (
             "least NPSH margin",
             Kind.TEXT,

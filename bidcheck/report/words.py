@@ -48,8 +48,9 @@ CAUTION = (
     " engineer come first."
 )
 HOW_SHARP = (
-    "How sharp the efficiency estimate is: an overstatement of 3 points cannot be shown by it, 5 seldom, 8 mostly,"
-    " 10 nearly always."
+    "How sharp the efficiency estimate is: an overstatement of 3 points cannot be shown by it, 5 seldom; 8 mostly and"
+    " 10 nearly always for end suction and double suction pumps at four poles or slower, less often for in-line, small"
+    " and faster ones."
 )
 
 

@@ -15,6 +15,7 @@ from tests.published.printed import assert_as_printed
 
 M3H = 1 / 3600
 
+# source: derived: four duties invented for the comparison: kind, m³/h, m, rpm, stages, eyes
 DUTIES = {
     "a": ("end suction", 130, 55, 2960, 1, 1),
     "b": ("end suction", 1000, 60, 1480, 1, 1),
