@@ -21,12 +21,12 @@ def scaled(points: Points | None, flow: float = 1.0, value: float = 1.0) -> Poin
 
 def scaled_points(points: Points, flow: float = 1.0, value: float = 1.0) -> Points:
     """Points with flow and value multiplied, printed digits along with them."""
-    return Points(
+    return replace(
+        points,
         flow=points.flow * flow,
         value=points.value * value,
         flow_half_digit=points.flow_half_digit * flow,
         value_half_digit=points.value_half_digit * value,
-        line=points.line,
     )
 
 

@@ -42,6 +42,8 @@ class Points:
         Half a unit in the last printed place of each figure, in the same units.
     line : array of int, shape (n,)
         Line of the file where the point stands; 0 where it has none (derived points).
+    flow_unit, value_unit : float
+        One unit of the heading in SI, as flow and value were written; 0 where not known.
     """
 
     flow: Floats
@@ -49,6 +51,8 @@ class Points:
     flow_half_digit: Floats
     value_half_digit: Floats
     line: Ints
+    flow_unit: float = 0.0
+    value_unit: float = 0.0
 
     def __post_init__(self) -> None:
         for array in (self.flow, self.value, self.flow_half_digit, self.value_half_digit, self.line):

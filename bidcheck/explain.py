@@ -4,12 +4,15 @@ A gap is a ratio found / expected. Each mistake leaves its own factor; every mis
 `CLOSE` of the gap is named, since several lie close together.
 """
 
-from collections.abc import Iterable, Sequence
+from collections.abc import Iterable, Iterator, Mapping, Sequence
 from dataclasses import dataclass
 from typing import Literal
 
 CLOSE = 0.01
 """How near a factor must be to the gap to explain it. Source: common practice, no source; methods use 1 %."""
+
+SAME_UNIT = 0.005
+"""How near two units are one: metric and other horsepower differ by 1.4 %."""
 
 Quantity = Literal["flow", "head", "power", "efficiency"]
 
@@ -21,50 +24,89 @@ class Mistake:
     quantity: Quantity
     factor: float
     words: str
+    heading: float = 0.0
+    """One unit of the heading it happens under, in SI; 0 where it may happen under any."""
 
 
 def _both_ways(quantity: Quantity, factor: float, forth: str, back: str) -> tuple[Mistake, Mistake]:
     return Mistake(quantity, factor, forth), Mistake(quantity, 1.0 / factor, back)
 
 
-HORSEPOWER = 1.0 / 0.745700
-METRIC_HORSEPOWER = 1.0 / 0.735499
+KILOWATT, HORSEPOWER_UNIT, METRIC_HORSEPOWER_UNIT = 1000.0, 745.700, 735.499
+HORSEPOWER = KILOWATT / HORSEPOWER_UNIT
+METRIC_HORSEPOWER = KILOWATT / METRIC_HORSEPOWER_UNIT
 US_GALLONS = 4.402868
 IMPERIAL_OF_US = 1.20095
-FEET = 1.0 / 0.3048
+CUBIC_METRE_PER_HOUR = 1.0 / 3600.0
+US_GPM = CUBIC_METRE_PER_HOUR / US_GALLONS
+FOOT = 0.3048
+FEET = 1.0 / FOOT
 
-UNIT_MISTAKES: tuple[Mistake, ...] = (
-    *_both_ways("power", HORSEPOWER, "power is in hp under a kW heading", "power is in kW under a hp heading"),
-    *_both_ways(
-        "power",
-        METRIC_HORSEPOWER,
-        "power is in metric hp under a kW heading",
-        "power is in kW under a metric hp heading",
+_UNITS: dict[Quantity, tuple[tuple[str, str, float], ...]] = {
+    "power": (("a", "kW", KILOWATT), ("a", "hp", HORSEPOWER_UNIT), ("a", "metric hp", METRIC_HORSEPOWER_UNIT)),
+    "flow": (
+        ("an", "m³/h", CUBIC_METRE_PER_HOUR),
+        ("a", "US gpm", US_GPM),
+        ("an", "imperial gpm", US_GPM * IMPERIAL_OF_US),
+        ("an", "l/s", 1e-3),
+        ("an", "m³/s", 1.0),
+        ("an", "L/min", 1e-3 / 60.0),
     ),
-    *_both_ways(
-        "flow", US_GALLONS, "flow is in US gpm under an m³/h heading", "flow is in m³/h under a US gpm heading"
+    "head": (("an", "m", 1.0), ("a", "ft", FOOT)),
+}
+"""Units that are mixed up: article, name, one of them in SI. Source: factors of the units (NIST SP 811)."""
+_PAIRS: dict[Quantity, tuple[tuple[str, str], ...]] = {
+    "power": (("hp", "kW"), ("metric hp", "kW")),
+    "flow": (
+        ("US gpm", "m³/h"),
+        ("imperial gpm", "US gpm"),
+        ("imperial gpm", "m³/h"),
+        ("m³/h", "l/s"),
+        ("m³/h", "m³/s"),
+        ("l/s", "m³/s"),
+        ("L/min", "m³/h"),
     ),
-    *_both_ways(
-        "flow",
-        1.0 / IMPERIAL_OF_US,
-        "flow is in imperial gpm under a US gpm heading",
-        "flow is in US gpm under an imperial one",
-    ),
-    *_both_ways(
-        "flow",
-        US_GALLONS / IMPERIAL_OF_US,
-        "flow is in imperial gpm under an m³/h heading",
-        "flow is in m³/h under an imperial gpm heading",
-    ),
-    *_both_ways("flow", 3.6, "flow is in m³/h under an l/s heading", "flow is in l/s under an m³/h heading"),
-    *_both_ways("flow", 3600.0, "flow is in m³/h under an m³/s heading", "flow is in m³/s under an m³/h heading"),
-    *_both_ways("flow", 1000.0, "flow is in l/s under an m³/s heading", "flow is in m³/s under an l/s heading"),
-    *_both_ways(
-        "flow", 1000.0 / 60.0, "flow is in L/min under an m³/h heading", "flow is in m³/h under an L/min heading"
-    ),
-    *_both_ways("head", FEET, "head is in ft under an m heading", "head is in m under a ft heading"),
-)
+    "head": (("ft", "m"),),
+}
+"""Pairs that are mixed up, either under the heading of the other."""
+
+
+def _unit_mistakes() -> Iterator[Mistake]:
+    """Every pair both ways."""
+    for quantity, pairs in _PAIRS.items():
+        units = {name: (article, unit) for article, name, unit in _UNITS[quantity]}
+        for one, other in pairs:
+            for meant, written in ((one, other), (other, one)):
+                article, heading = units[written]
+                words = f"{quantity} is in {meant} under {article} {written} heading"
+                yield Mistake(quantity, heading / units[meant][1], words, heading)
+
+
+UNIT_MISTAKES: tuple[Mistake, ...] = tuple(_unit_mistakes())
 """Units put under the wrong heading. Source: factors of the units (NIST SP 811)."""
+
+
+def possible(mistakes: Iterable[Mistake], headings: Mapping[Quantity, float]) -> tuple[Mistake, ...]:
+    """Mistakes that could have happened under the headings there are.
+
+    Parameters
+    ----------
+    mistakes : iterable of Mistake
+    headings : mapping
+        One unit of each quantity's heading in SI; 0 or absent where not known, which leaves everything possible.
+
+    Examples
+    --------
+    >>> [mistake.words for mistake in possible(UNIT_MISTAKES, {"power": 1000.0}) if mistake.quantity == "power"]
+    ['power is in hp under a kW heading', 'power is in metric hp under a kW heading']
+    """
+    return tuple(
+        mistake
+        for mistake in mistakes
+        if not mistake.heading
+        or not headings.get(mistake.quantity)
+        or abs(headings[mistake.quantity] / mistake.heading - 1.0) <= SAME_UNIT
+    )
 
 
 def stage_mistakes(stages: int) -> tuple[Mistake, ...]:

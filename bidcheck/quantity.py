@@ -4,6 +4,7 @@ This is the one table that says in which units a kind is printed (SI and US), th
 evaluation.json, and how many decimals it deserves. Conversion itself is done by `bidcheck.units`.
 """
 
+import re
 from dataclasses import dataclass
 from enum import Enum, StrEnum
 from typing import NamedTuple
@@ -131,6 +132,22 @@ class Stated:
     value: float
     half_digit: float
     text: str
+
+
+_NUMBER = re.compile(r"[-+]?\d+(\.\d+)?(?=\s*[^\d\s.,])")
+
+
+def unit_of(stated: Stated) -> float:
+    """One of the units a figure was written in, in SI; 0 where the text does not tell.
+
+    Examples
+    --------
+    >>> unit_of(Stated(128000.0, 50.0, "128.0 kW")), unit_of(Stated(0.5, 0.01, "half"))
+    (1000.0, 0.0)
+    """
+    found = _NUMBER.match(stated.text.strip())
+    number = float(found[0]) if found is not None else 0.0
+    return stated.value / number if number else 0.0
 
 
 @dataclass(frozen=True, slots=True)

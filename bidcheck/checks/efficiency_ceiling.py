@@ -2,14 +2,16 @@
 
 Disc friction of the offered diameter, leakage through the neck rings, the best hydraulic efficiency known and small
 mechanical losses add up to a ceiling. A claim above it, beyond the doubt of the fit, contradicts the diameter,
-speed and flow of the same bid.
+speed and flow of the same bid – unless one mistake in diameter, speed or stages would explain it, which is asked.
 """
 
 from collections.abc import Iterator
 
 from bidcheck.case import Case
-from bidcheck.checks.evidence import points, share
+from bidcheck.checks.evidence import points, share, text
+from bidcheck.checks.impeller_causes import likely_causes
 from bidcheck.checks.request import asked, not_applicable
+from bidcheck.explain import in_words
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import Limit, within
 from bidcheck.quantity import Kind
@@ -40,6 +42,13 @@ def run(case: Case) -> Iterator[Measured]:
     }
     evidence |= {name.replace(" ", "_"): share(loss) for name, loss in estimate.ceiling_terms.items()}
     compared = within(claim, limit, slack=doubt)
+    causes = () if compared.holds else likely_causes(case)
+    if causes:
+        evidence["causes"] = text(in_words(causes))
+        yield Measured(
+            subject="best efficiency", verdict=Verdict.QUERY, limit=limit, evidence=evidence, wording="explained"
+        )
+        return
     above = "above" if case.max_curve is not None and case.max_curve.impeller is not None else "above, no diameter"
     yield Measured(
         subject="best efficiency", holds=compared, evidence=evidence, wording="" if compared.holds else above
@@ -59,6 +68,12 @@ CHECK = Check(
             "Your curve peaks at {claim}, more than the losses of any likely impeller leave at this speed, head and"
             " flow ({ceiling}). Please state the impeller diameter, and correct the efficiency or the figures it"
             " belongs to.",
+        ),
+        "explained": Wording(
+            "Best efficiency {claim} is {above_ceiling} above the ceiling {ceiling} that the losses leave for the"
+            " offered diameter, speed and flow. It would be explained if {causes}.",
+            "Your curve peaks at {claim}, more than the losses of your diameter, speed and flow leave ({ceiling}). It"
+            " looks as if {causes}. Please confirm and correct.",
         ),
         "": Wording("Best efficiency {claim} stays below the loss ceiling, {ceiling}."),
         "above": Wording(

@@ -11,7 +11,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import diameter, ratio, specific_speed, text
-from bidcheck.checks.impeller_causes import Figures, likely_causes
+from bidcheck.checks.impeller_causes import figures_of, likely_causes
 from bidcheck.checks.request import Item, asked, not_applicable
 from bidcheck.checks.unlike import at_most_remark
 from bidcheck.checks.verdicts import missed
@@ -29,63 +29,48 @@ def run(case: Case) -> Iterator[Measured]:
         yield asked("best efficiency", missing)
     elif impeller.diameter is None:
         yield asked("best efficiency", "impeller diameters")
-    elif impeller.ratio is None:
-        reason = next(source.reason for source in impeller.sources if source.value is None)
-        yield not_applicable("best efficiency", reason)
     else:
-        yield _placed(case, impeller, impeller.ratio)
+        figures = figures_of(case)
+        assert figures is not None
+        yield _placed(case, impeller, figures.ratio())
 
 
 def _placed(case: Case, impeller: ImpellerEstimate, found: float) -> Measured:
     """The coefficient against what is plausible, and the mistake that would explain it."""
     limits, evidence = case.inquiry.limits, _evidence(case, impeller, found)
-    compared = within(found, limits.head_coefficient)
+    compared, far = within(found, limits.head_coefficient), within(found, limits.head_coefficient_far)
+    if impeller.expected is None and far.holds:
+        reason = next(source.reason for source in impeller.sources if source.value is None)
+        return not_applicable("best efficiency", reason)
     if compared.holds:
         return Measured(subject="best efficiency", holds=compared, evidence=evidence)
-    far = within(found, limits.head_coefficient_far)
     limit = limits.head_coefficient if far.holds else limits.head_coefficient_far
-    causes = likely_causes(_figures(case, impeller), case.bid)
+    causes = likely_causes(case)
     if causes:
         evidence["causes"] = text(in_words(causes))
     elif far.holds:
-        return Measured(
-            subject="best efficiency",
-            verdict=missed(limit, Verdict.REMARK),
-            limit=limit,
-            evidence=evidence,
-            wording="off",
-        )
+        verdict = missed(limit, Verdict.REMARK)
+        return Measured(subject="best efficiency", verdict=verdict, limit=limit, evidence=evidence, wording="off")
+    verdict = missed(limit, Verdict.QUERY)
     return Measured(
         subject="best efficiency",
-        verdict=at_most_remark(case.bid, missed(limit, Verdict.QUERY)) if not causes or far.holds else Verdict.QUERY,
+        verdict=verdict if causes and not far.holds else at_most_remark(case.bid, verdict),
         limit=limit,
         evidence=evidence,
         wording="explained" if causes else "far",
     )
 
 
-def _figures(case: Case, impeller: ImpellerEstimate) -> Figures:
-    """The figures behind the coefficient."""
-    best = case.max_fits.bep if case.max_fits is not None else None
-    assert best is not None
-    assert best.head is not None
-    assert impeller.diameter is not None
-    bid = case.bid
-    return Figures(best.flow / bid.suction_eyes, best.head, bid.speed_rpm, impeller.diameter, bid.stages)
-
-
 def _evidence(case: Case, impeller: ImpellerEstimate, found: float) -> dict[str, Evidence]:
-    """Coefficients, diameters, specific speed."""
+    """Coefficients, diameters, specific speed; what is expected is held at the ends of its range."""
     assert impeller.offered is not None
-    assert impeller.expected is not None
     assert impeller.diameter is not None
-    assert impeller.expected_diameter is not None
     evidence = {
         "offered": ratio(impeller.offered),
-        "expected": ratio(impeller.expected),
+        "expected": ratio(impeller.offered / found),
         "over_expected": ratio(found),
         "diameter": diameter(impeller.diameter),
-        "expected_diameter": diameter(impeller.expected_diameter),
+        "expected_diameter": diameter(impeller.diameter * found**0.5),
     }
     if impeller.cordier_diameter is not None:
         evidence["cordier_diameter"] = diameter(impeller.cordier_diameter)
@@ -118,7 +103,7 @@ CHECK = Check(
         ),
         "explained": Wording(
             "Head coefficient {offered} at best efficiency is {over_expected} times the {expected} expected: {diameter}"
-            " is offered where {expected_diameter} is expected. One mistake would explain it: {causes}.",
+            " is offered where {expected_diameter} is expected. It would be explained if {causes}.",
             "Your diameter ({diameter}), speed, stages and head do not belong together: about {expected_diameter} is"
             " expected. It looks as if {causes}. Please confirm and correct.",
         ),

@@ -3,11 +3,10 @@
 from collections.abc import Iterator
 from dataclasses import dataclass, replace
 
-from bidcheck.bid import Bid
-from bidcheck.errors import OutOfRange
+from bidcheck.case import Case
 from bidcheck.estimates.expected import MULTISTAGE
-from bidcheck.estimates.head_coefficient import head_coefficient, optimum_head_coefficient
-from bidcheck.explain import FEET, US_GALLONS
+from bidcheck.estimates.head_coefficient import HIGHEST_NQ, LOWEST_NQ, head_coefficient, optimum_head_coefficient
+from bidcheck.explain import UNIT_MISTAKES, Quantity, possible
 from bidcheck.hydraulics.driver import synchronous_speed
 from bidcheck.hydraulics.specific_speed import specific_speed
 
@@ -17,6 +16,9 @@ half the scatter of honest impellers and a little."""
 MOST_NAMED = 3
 """More would explain nothing."""
 MOST_STAGES = 16
+ABOUT = (0.75, 1.4)
+"""Head offered over head asked for within which a curve is taken to be in the units it says. Source: common practice,
+no source."""
 INCH = 25.4
 
 
@@ -30,46 +32,63 @@ class Figures:
     diameter: float
     stages: int
 
-    def ratio(self) -> float | None:
-        """Head coefficient over the expected one; None where none is expected."""
+    def ratio(self) -> float:
+        """Head coefficient over the expected one, which is held at the ends of its range of specific speed."""
         head = self.head / self.stages
-        try:
-            expected = optimum_head_coefficient(specific_speed(self.speed_rpm, self.flow, head))
-        except OutOfRange:
-            return None
-        return head_coefficient(head, self.speed_rpm, self.diameter) / expected
+        nq = min(max(specific_speed(self.speed_rpm, self.flow, head), LOWEST_NQ), HIGHEST_NQ)
+        return head_coefficient(head, self.speed_rpm, self.diameter) / optimum_head_coefficient(nq)
 
 
-def likely_causes(figures: Figures, bid: Bid) -> tuple[str, ...]:
-    """Words of every single mistake that brings the head coefficient near what is expected, the nearest first."""
+def likely_causes(case: Case) -> tuple[str, ...]:
+    """Words of every single mistake that brings the head coefficient near what is expected, the nearest first.
+
+    Empty where the bid states no diameter or nothing would do. Flow and head in other units are looked at only where
+    the curve misses the duty: a curve that meets it is in the units it says.
+    """
+    figures = figures_of(case)
+    if figures is None:
+        return ()
     found: list[tuple[float, str]] = []
-    for words, meant in _candidates(figures, bid):
-        ratio = meant.ratio()
-        if ratio is not None and abs(ratio - 1.0) <= CLOSE:
-            found.append((abs(ratio - 1.0), words))
+    kinds = [_units(figures, case), _other_speeds(figures, case), _other_stages(figures, case)]
+    for kind in kinds:
+        near = [(abs(meant.ratio() - 1.0), words) for words, meant in kind]
+        found += [item for item in near if item[0] <= CLOSE]
     return tuple(words for _, words in sorted(found)[:MOST_NAMED])
 
 
-def _candidates(figures: Figures, bid: Bid) -> Iterator[tuple[str, Figures]]:
-    """Each mistake with the figures that would have been meant."""
+def figures_of(case: Case) -> Figures | None:
+    """Figures of the curve that the estimates were taken from; None where one is missing."""
+    best, impeller = case.max_fits.bep if case.max_fits is not None else None, case.estimates.impeller
+    if best is None or best.head is None or best.head <= 0 or impeller is None or impeller.diameter is None:
+        return None
+    bid = case.bid
+    return Figures(best.flow / bid.suction_eyes, best.head, bid.speed_rpm, impeller.diameter, bid.stages)
+
+
+def _units(figures: Figures, case: Case) -> Iterator[tuple[str, Figures]]:
+    """Diameter, and flow or head where the duty is missed, in another unit."""
     yield "the diameter is in inches under mm", replace(figures, diameter=figures.diameter * INCH)
     yield "the diameter is in mm under inches", replace(figures, diameter=figures.diameter / INCH)
     yield "the diameter is in cm under mm", replace(figures, diameter=figures.diameter * 10.0)
     yield "the diameter is in mm under cm", replace(figures, diameter=figures.diameter / 10.0)
-    yield "head is in ft under an m heading", replace(figures, head=figures.head / FEET)
-    yield "head is in m under a ft heading", replace(figures, head=figures.head * FEET)
-    yield "flow is in US gpm under an m³/h heading", replace(figures, flow=figures.flow / US_GALLONS)
-    yield "flow is in m³/h under a US gpm heading", replace(figures, flow=figures.flow * US_GALLONS)
-    yield from _other_speeds(figures)
-    if bid.stages > 1 or bid.arrangement in (*MULTISTAGE, "vertical turbine"):
-        for stages in range(1, MOST_STAGES + 1):
-            if stages != figures.stages:
-                count = "one stage" if stages == 1 else f"{stages} stages"
-                yield f"head is that of {count}, not of {figures.stages}", replace(figures, stages=stages)
+    if case.curve is None or case.curve.head is None or _meets_duty(case):
+        return
+    headings: dict[Quantity, float] = {"flow": case.curve.head.flow_unit, "head": case.curve.head.value_unit}
+    for mistake in possible(UNIT_MISTAKES, headings):
+        if mistake.quantity == "flow":
+            yield mistake.words, replace(figures, flow=figures.flow / mistake.factor)
+        elif mistake.quantity == "head":
+            yield mistake.words, replace(figures, head=figures.head / mistake.factor)
 
 
-def _other_speeds(figures: Figures) -> Iterator[tuple[str, Figures]]:
-    """The curve belongs to another ordinary motor speed, at the same slip."""
+def _meets_duty(case: Case) -> bool:
+    """Whether the head offered at rated flow is about that asked for."""
+    head, rated = case.at_duty.head, case.inquiry.duty.rated_head
+    return head is not None and "head" not in case.at_duty.from_claims and ABOUT[0] <= head / rated <= ABOUT[1]
+
+
+def _other_speeds(figures: Figures, case: Case) -> Iterator[tuple[str, Figures]]:
+    """The curve belongs to another ordinary motor speed at the same slip, or is at the offered speed already."""
     speeds = [
         (synchronous_speed(f, poles), f"{f:.0f} Hz, {poles} poles") for f in (50.0, 60.0) for poles in (2, 4, 6, 8)
     ]
@@ -78,3 +97,19 @@ def _other_speeds(figures: Figures) -> Iterator[tuple[str, Figures]]:
         if speed != own:
             meant = figures.speed_rpm * speed / own
             yield f"the curve belongs to about {meant:.0f} 1/min ({words})", replace(figures, speed_rpm=meant)
+    drawn = {curve.speed_rpm for curve in case.bid.curves if case.max_curve and curve.file == case.max_curve.file}
+    for speed in drawn:
+        ratio = figures.speed_rpm / speed
+        if abs(ratio - 1.0) > CLOSE:
+            words = f"the curve is at the offered speed already, not at {speed:.0f} 1/min"
+            yield words, replace(figures, flow=figures.flow / ratio, head=figures.head / ratio**2)
+
+
+def _other_stages(figures: Figures, case: Case) -> Iterator[tuple[str, Figures]]:
+    """The number of stages that suits head, diameter and speed best, where the bid is of a kind that has several."""
+    if case.bid.stages == 1 and case.bid.arrangement not in (*MULTISTAGE, "vertical turbine"):
+        return
+    others = [replace(figures, stages=count) for count in range(1, MOST_STAGES + 1) if count != figures.stages]
+    best = min(others, key=lambda meant: abs(meant.ratio() - 1.0))
+    count = "one stage" if best.stages == 1 else f"{best.stages} stages"
+    yield f"head is that of {count}, not of {figures.stages}", best

@@ -16,10 +16,11 @@ from bidcheck.checks.request import Item, asked, not_applicable
 from bidcheck.checks.unlike import at_most_remark
 from bidcheck.checks.verdicts import missed
 from bidcheck.estimates.npsh3_expected import HIGHEST_NSS, LOWEST_NSS, expected_npsh3
-from bidcheck.explain import FEET
+from bidcheck.explain import FEET, FOOT, SAME_UNIT
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.hydraulics.specific_speed import suction_specific_speed as nss_of
 from bidcheck.limits import within
+from bidcheck.quantity import unit_of
 
 NEAR = (0.85, 1.15)
 """Rated flow over best efficiency flow within which NPSH3 at rated flow may stand for that at best efficiency.
@@ -76,7 +77,7 @@ def _placed(case: Case, claimed: _Claimed) -> Measured:
     if high.holds and low.holds:
         return Measured(subject="best efficiency", holds=high, evidence=evidence)
     limit, wording = (limits.nss_credible, "low") if not high.holds else (limits.nss_sound, "high")
-    cause = _units(nss, too_low=not high.holds)
+    cause = _units(nss, _heading(case), too_low=not high.holds)
     verdict = missed(limit, Verdict.QUERY)
     if cause:
         evidence["cause"] = text(cause)
@@ -90,11 +91,19 @@ def _placed(case: Case, claimed: _Claimed) -> Measured:
     )
 
 
-def _units(nss: float, *, too_low: bool) -> str:
-    """Metres and feet mixed up, where that would bring the claim into the ordinary band."""
-    factor = FEET**0.75
+def _heading(case: Case) -> float:
+    """One unit that NPSH3 was written in, in SI; 0 where not known."""
+    curve, claim = case.max_curve, case.bid.claims.npsh3
+    if curve is not None and curve.npsh3 is not None:
+        return curve.npsh3.value_unit
+    return unit_of(claim) if claim is not None else 0.0
+
+
+def _units(nss: float, heading: float, *, too_low: bool) -> str:
+    """Metres and feet mixed up, where that would bring the claim into the ordinary band and the heading allows it."""
+    factor, under = FEET**0.75, FOOT if too_low else 1.0
     meant = nss / factor if too_low else nss * factor
-    if not LOWEST_NSS <= meant <= HIGHEST_NSS:
+    if not LOWEST_NSS <= meant <= HIGHEST_NSS or (heading and abs(heading / under - 1.0) > SAME_UNIT):
         return ""
     return "NPSH3 is in m under a ft heading" if too_low else "NPSH3 is in ft under an m heading"
 

@@ -18,11 +18,13 @@ from bidcheck.curve import Column, Curve, Floats, Points
 from bidcheck.explain import (
     BALANCE,
     UNIT_MISTAKES,
+    Quantity,
     density_mistakes,
     frequency_mistakes,
     in_words,
     mistakes_that_close,
     motor_mistakes,
+    possible,
     pump_mistakes,
     stage_mistakes,
 )
@@ -117,7 +119,7 @@ def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measur
         middle,
         BALANCE,
         (
-            *UNIT_MISTAKES,
+            *possible(UNIT_MISTAKES, headings_of(case.curve)),
             *stage_mistakes(bid.stages),
             *pump_mistakes(case.inquiry.duty.pumps_running),
             *frequency_mistakes(),
@@ -150,6 +152,13 @@ def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measur
         evidence=evidence,
         wording="contradiction",
     )
+
+
+def headings_of(curve: Curve | None) -> dict[Quantity, float]:
+    """One unit of each heading in SI, 0 where not known."""
+    if curve is None or curve.head is None or curve.power is None:
+        return {}
+    return {"flow": curve.head.flow_unit, "head": curve.head.value_unit, "power": curve.power.value_unit}
 
 
 def _single_points(case: Case, line: Floats, Q: Floats, gap: Floats, tolerance: Floats) -> Iterator[Measured]:

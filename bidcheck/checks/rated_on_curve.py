@@ -14,18 +14,18 @@ from bidcheck.checks.verdicts import missed
 from bidcheck.curve import COLUMN_WORDS, COLUMNS, Column, Fit
 from bidcheck.explain import (
     UNIT_MISTAKES,
-    Quantity,
     density_mistakes,
     frequency_mistakes,
     in_words,
     mistakes_that_close,
     motor_mistakes,
+    possible,
     pump_mistakes,
     stage_mistakes,
 )
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import within
-from bidcheck.quantity import Stated
+from bidcheck.quantity import Stated, unit_of
 
 SPEED_EXPONENT: dict[Column, int] = {"head": 2, "efficiency": 0, "power": 3}
 """How each quantity goes with speed. Source: affinity laws."""
@@ -67,7 +67,7 @@ def _compared(
     drawn = _at_speed_drawn(case, column, fit, flow)
     if drawn is not None and within(abs(claim.value / drawn - 1.0), limit, slack=slack).holds:
         return Measured(subject=subject, verdict=Verdict.REMARK, limit=limit, evidence=evidence, wording="speed drawn")
-    mistakes = _mistakes(case, column, gap)
+    mistakes = _mistakes(case, column, gap, unit_of(claim))
     if mistakes:
         evidence["mistakes"] = text(in_words(mistakes))
         return Measured(subject=subject, verdict=Verdict.QUERY, limit=limit, evidence=evidence, wording="explained")
@@ -100,24 +100,22 @@ def _doubt(fit: Fit, flow: float) -> float:
     return width if width < float("inf") else fit.largest_residual
 
 
-def _mistakes(case: Case, column: Column, gap: float) -> tuple[str, ...]:
-    """The single mistakes that would put the claim on the curve."""
+def _mistakes(case: Case, column: Column, gap: float, unit: float) -> tuple[str, ...]:
+    """The single mistakes, in the claim or a motor's losses in the curve, that would put the claim on the curve."""
     if column == "npsh3":
         return ()
-    quantity: Quantity = column
     bid = case.bid
-    return mistakes_that_close(
-        gap,
-        {quantity: 1},
-        (
-            *UNIT_MISTAKES,
-            *stage_mistakes(bid.stages),
-            *pump_mistakes(case.inquiry.duty.pumps_running),
-            *frequency_mistakes(),
-            *density_mistakes(case.inquiry.liquid.density),
-            *motor_mistakes(bid.driver.efficiency),
-        ),
+    motor = motor_mistakes(bid.driver.efficiency)
+    in_claim = (
+        *possible(UNIT_MISTAKES, {column: unit}),
+        *stage_mistakes(bid.stages),
+        *pump_mistakes(case.inquiry.duty.pumps_running),
+        *frequency_mistakes(),
+        *density_mistakes(case.inquiry.liquid.density),
+        *motor,
     )
+    in_curve = mistakes_that_close(1.0 / gap, {column: 1}, motor)
+    return (*mistakes_that_close(gap, {column: 1}, in_claim), *(f"in the curve {words}" for words in in_curve))
 
 
 CHECK = Check(

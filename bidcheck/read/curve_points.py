@@ -110,4 +110,6 @@ def _points(given: list[tuple[Cell, Cell]], flow: Heading, column: Heading, kind
         flow_half_digit=np.array([half_digit_to_si(cell.half_digit, flow_unit, Kind.FLOW) for cell, _ in given]),
         value_half_digit=np.array([half_digit_to_si(cell.half_digit, unit, kind) for _, cell in given]),
         line=np.array([value.line for _, value in given], dtype=np.int64),
+        flow_unit=to_si(1.0, flow_unit, Kind.FLOW),
+        value_unit=to_si(1.0, unit, kind),
     )

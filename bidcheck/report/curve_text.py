@@ -6,9 +6,9 @@ from rich.console import Console
 from rich.table import Table
 from rich.text import Text
 
-from bidcheck.checks.power_balance import balanced_rows
+from bidcheck.checks.power_balance import balanced_rows, headings_of
 from bidcheck.curve import COLUMN_KINDS, COLUMN_WORDS, COLUMNS, Curve, Fit, Fits, Floats
-from bidcheck.explain import BALANCE, UNIT_MISTAKES, frequency_mistakes, in_words, mistakes_that_close
+from bidcheck.explain import BALANCE, UNIT_MISTAKES, frequency_mistakes, in_words, mistakes_that_close, possible
 from bidcheck.hydraulics.specific_speed import specific_speed, suction_specific_speed
 from bidcheck.quantity import Kind, UnitSystem
 from bidcheck.report.format import bare, figure, plain
@@ -116,7 +116,8 @@ def _print_balance(fits: Fits, curve: Curve, console: Console, system: UnitSyste
     odd = {point.line for point in fits.odd_points}
     sound = [float(gap) for line, gap in zip(lines, gaps, strict=True) if int(line) not in odd] or gaps.tolist()
     middle, allowed = median(sound), float(median(tolerances.tolist()))
-    closing = mistakes_that_close(middle, BALANCE, (*UNIT_MISTAKES, *frequency_mistakes()))
+    mistakes = (*possible(UNIT_MISTAKES, headings_of(curve)), *frequency_mistakes())
+    closing = mistakes_that_close(middle, BALANCE, mistakes)
     if abs(middle - 1.0) <= allowed:
         verdict = "power balance: head, power and efficiency agree within the printed digits"
     else:

@@ -40,6 +40,8 @@ def _decimals(value: float, kind: Kind, decimals: int) -> int:
     size = abs(value)
     if size >= 999.5:
         return 0
+    if kind is Kind.RATIO and size >= MANY_TIMES:
+        return 0 if size >= 10.0 * MANY_TIMES else 1
     if kind in THREE_DIGITS and 0.0 < size < 99.95:
         return max(decimals, 2 - max(math.floor(math.log10(size)), 0))
     return decimals

@@ -6,6 +6,7 @@ from bidcheck.explain import (
     frequency_mistakes,
     mistakes_that_close,
     motor_mistakes,
+    possible,
     pump_mistakes,
     stage_mistakes,
 )
@@ -21,7 +22,7 @@ BALANCE = {"flow": 1, "head": 1, "power": -1}
         (4.403, "flow is in US gpm under an m³/h heading"),
         (3.281, "head is in ft under an m heading"),
         (1 / 3.6, "flow is in l/s under an m³/h heading"),
-        (1.201, "flow is in US gpm under an imperial one"),
+        (1.201, "flow is in US gpm under an imperial gpm heading"),
         (3600.0, "flow is in m³/h under an m³/s heading"),
         (1000.0, "flow is in l/s under an m³/s heading"),
         (1000 / 60, "flow is in L/min under an m³/h heading"),
@@ -54,6 +55,10 @@ def test_stages_pumps_density_and_motor():
     assert mistakes_that_close(0.5, {"flow": 1}, pump_mistakes(2)) != ()
     assert mistakes_that_close(0.75, BALANCE, density_mistakes(750.0)) == ("density is left out of power",)
     assert mistakes_that_close(0.95, BALANCE, motor_mistakes(0.95)) == ("power is motor input, not shaft power",)
+    with_efficiency = BALANCE | {"efficiency": -1}
+    assert mistakes_that_close(1 / 0.95, with_efficiency, motor_mistakes(0.95)) == (
+        "efficiency is that of pump and motor together",
+    )
 
 
 def test_what_cannot_have_happened_is_not_offered():
@@ -61,3 +66,12 @@ def test_what_cannot_have_happened_is_not_offered():
     assert pump_mistakes(1) == ()
     assert density_mistakes(998.2) == ()
     assert motor_mistakes(None) == ()
+
+
+def test_a_mistake_needs_the_heading_it_happens_under():
+    gap = 1.341  # power too small: kW under a hp heading, and nothing else
+    words = "power is in kW under a hp heading"
+    assert words in mistakes_that_close(gap, BALANCE, possible(UNIT_MISTAKES, {"power": 745.6999}))
+    assert mistakes_that_close(gap, BALANCE, possible(UNIT_MISTAKES, {"power": 1000.0})) == ()
+    assert words in mistakes_that_close(gap, BALANCE, possible(UNIT_MISTAKES, {"power": 0.0}))
+    assert words not in mistakes_that_close(gap, BALANCE, possible(UNIT_MISTAKES, {"power": 735.49875}))
