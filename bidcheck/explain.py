@@ -11,6 +11,9 @@ from typing import Literal
 CLOSE = 0.01
 """How near a factor must be to the gap to explain it. Source: common practice, no source; methods use 1 %."""
 
+CONVERTED = "before it was converted"
+"""Said of a mistake that cannot have happened under the heading there is: figures are converted on their way."""
+
 SAME_UNIT = 0.005
 """How near two units are one: metric and other horsepower differ by 1.4 %."""
 
@@ -107,6 +110,35 @@ def possible(mistakes: Iterable[Mistake], headings: Mapping[Quantity, float]) ->
         or not headings.get(mistake.quantity)
         or abs(headings[mistake.quantity] / mistake.heading - 1.0) <= SAME_UNIT
     )
+
+
+def closing(
+    gap: float, exponents: dict[Quantity, int], others: Iterable[Mistake], headings: Mapping[Quantity, float]
+) -> tuple[str, ...]:
+    """Name every single mistake that closes a gap: under the headings there are, else before figures were converted.
+
+    Parameters
+    ----------
+    gap, exponents
+        As for `mistakes_that_close`.
+    others : iterable of Mistake
+        Those that have nothing to do with headings.
+    headings : mapping
+        As for `possible`.
+
+    Examples
+    --------
+    >>> closing(0.746, BALANCE, (), {"power": 1000.0})
+    ('power is in hp under a kW heading',)
+    >>> closing(0.746, BALANCE, (), {"power": 745.7})
+    ('power is in hp under a kW heading, before it was converted',)
+    """
+    here = possible(UNIT_MISTAKES, headings)
+    found = mistakes_that_close(gap, exponents, (*here, *others))
+    if found:
+        return found
+    before = mistakes_that_close(gap, exponents, (mistake for mistake in UNIT_MISTAKES if mistake not in here))
+    return tuple(f"{words}, {CONVERTED}" for words in before)
 
 
 def stage_mistakes(stages: int) -> tuple[Mistake, ...]:

@@ -1,7 +1,10 @@
 """Seeded sound bids with their inquiry: honest pumps, printed and read as bidders do. Test support."""
 
+from dataclasses import replace
+
 import numpy as np
 
+from bidcheck.arrangement import Arrangement
 from bidcheck.bid import Bid, Claims, Driver
 from bidcheck.curve import Curve, Floats, Points
 from bidcheck.estimates.efficiency import estimate_efficiency
@@ -128,3 +131,49 @@ def _points(q: Floats, values: Floats, q_half: float, half: float, lines: "np.ty
     """Points of one column with their half digits."""
     n = len(q)
     return Points(q.copy(), values.copy(), np.full(n, q_half), np.full(n, half), lines.copy())
+
+
+UNLIKE = ("solids handling", "submersible multistage", "vertical turbine", "sealless")
+"""Arrangements whose honest pumps lie furthest from the published shapes."""
+
+
+def unlike_inquiry(rng: np.random.Generator, arrangement: Arrangement) -> Inquiry:
+    """One inquiry with one honest wastewater, borehole, vertical turbine or sealless pump.
+
+    Lower efficiency, smaller head coefficient, steeper head, poorer NPSH3 than an end suction pump of the same size.
+    """
+    stages = {"submersible multistage": int(rng.integers(2, 12)), "vertical turbine": int(rng.integers(1, 6))}
+    count = stages.get(arrangement, 1)
+    while True:
+        nq, flow = rng.uniform(22.0, 75.0), 10 ** rng.uniform(np.log10(20.0), np.log10(1500.0)) * M3H
+        speed = float(rng.choice(SPEEDS))
+        head = (speed * flow**0.5 / nq) ** (4.0 / 3.0)
+        if 4.0 <= head <= 80.0:
+            break
+    estimate = estimate_efficiency(
+        arrangement="end suction", nq=nq, nq_eye=nq, flow=flow, head_per_stage=head, speed_rpm=speed
+    )
+    assert estimate.expected is not None
+    efficiency = estimate.expected - rng.uniform(0.0, 0.12)
+    diameter = diameter_for_head(head, speed, optimum_head_coefficient(nq) * rng.uniform(0.72, 1.1))
+    npsh3 = npsh3_from_suction_specific_speed(speed, flow, rng.uniform(5000.0, 11000.0) / 51.645)
+    scatter = rng.uniform(0.001, 0.004)
+    curve = _curve(rng, nq, flow, head * count, efficiency, npsh3, scatter, speed, round(diameter, 3))
+    assert curve.head is not None
+    steeper = 1.0 + rng.uniform(0.0, 0.25) * (1.0 - np.minimum(curve.head.flow / flow, 1.0)) ** 2
+    curve = replace(curve, stages=count, head=replace(curve.head, value=curve.head.value * steeper), power=None)
+    rated = round(rng.uniform(0.86, 1.04) * flow / M3H) * M3H
+    duty_head = float(np.interp(rated, curve.head.flow, curve.head.value)) if curve.head is not None else head
+    bid = Bid(
+        bidder="alder",
+        revision="a",
+        folder="bids/alder",
+        arrangement=arrangement,
+        speed_rpm=speed,
+        stages=count,
+        curves=(curve,),
+        impeller_rated=round(diameter, 3),
+        impeller_max=round(1.05 * diameter, 3),
+    )
+    duty = Duty(rated_flow=rated, rated_head=round(0.985 * duty_head, 1), npsha=round(1.6 * npsh3 + 2.0, 1))
+    return inquiry(duty=duty, bids=(bid,))

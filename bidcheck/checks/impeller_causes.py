@@ -6,7 +6,7 @@ from dataclasses import dataclass, replace
 from bidcheck.case import Case
 from bidcheck.estimates.expected import MULTISTAGE
 from bidcheck.estimates.head_coefficient import HIGHEST_NQ, LOWEST_NQ, head_coefficient, optimum_head_coefficient
-from bidcheck.explain import UNIT_MISTAKES, Quantity, possible
+from bidcheck.explain import CONVERTED, UNIT_MISTAKES, Quantity, possible
 from bidcheck.hydraulics.driver import synchronous_speed
 from bidcheck.hydraulics.specific_speed import specific_speed
 
@@ -74,11 +74,13 @@ def _units(figures: Figures, case: Case) -> Iterator[tuple[str, Figures]]:
     if case.curve is None or case.curve.head is None or _meets_duty(case):
         return
     headings: dict[Quantity, float] = {"flow": case.curve.head.flow_unit, "head": case.curve.head.value_unit}
-    for mistake in possible(UNIT_MISTAKES, headings):
+    here = possible(UNIT_MISTAKES, headings)
+    for mistake in UNIT_MISTAKES:
+        words = mistake.words if mistake in here else f"{mistake.words}, {CONVERTED}"
         if mistake.quantity == "flow":
-            yield mistake.words, replace(figures, flow=figures.flow / mistake.factor)
+            yield words, replace(figures, flow=figures.flow / mistake.factor)
         elif mistake.quantity == "head":
-            yield mistake.words, replace(figures, head=figures.head / mistake.factor)
+            yield words, replace(figures, head=figures.head / mistake.factor)
 
 
 def _meets_duty(case: Case) -> bool:

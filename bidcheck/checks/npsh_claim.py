@@ -16,7 +16,7 @@ from bidcheck.checks.request import Item, asked, not_applicable
 from bidcheck.checks.unlike import at_most_remark
 from bidcheck.checks.verdicts import missed
 from bidcheck.estimates.npsh3_expected import HIGHEST_NSS, LOWEST_NSS, expected_npsh3
-from bidcheck.explain import FEET, FOOT, SAME_UNIT
+from bidcheck.explain import CONVERTED, FEET, FOOT, SAME_UNIT
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.hydraulics.specific_speed import suction_specific_speed as nss_of
 from bidcheck.limits import within
@@ -100,12 +100,13 @@ def _heading(case: Case) -> float:
 
 
 def _units(nss: float, heading: float, *, too_low: bool) -> str:
-    """Metres and feet mixed up, where that would bring the claim into the ordinary band and the heading allows it."""
+    """Metres and feet mixed up, where that would bring the claim into the ordinary band."""
     factor, under = FEET**0.75, FOOT if too_low else 1.0
     meant = nss / factor if too_low else nss * factor
-    if not LOWEST_NSS <= meant <= HIGHEST_NSS or (heading and abs(heading / under - 1.0) > SAME_UNIT):
+    if not LOWEST_NSS <= meant <= HIGHEST_NSS:
         return ""
-    return "NPSH3 is in m under a ft heading" if too_low else "NPSH3 is in ft under an m heading"
+    words = "NPSH3 is in m under a ft heading" if too_low else "NPSH3 is in ft under an m heading"
+    return words if not heading or abs(heading / under - 1.0) <= SAME_UNIT else f"{words}, {CONVERTED}"
 
 
 CHECK = Check(

@@ -17,14 +17,12 @@ from bidcheck.checks.verdicts import missed
 from bidcheck.curve import Column, Curve, Floats, Points
 from bidcheck.explain import (
     BALANCE,
-    UNIT_MISTAKES,
     Quantity,
+    closing,
     density_mistakes,
     frequency_mistakes,
     in_words,
-    mistakes_that_close,
     motor_mistakes,
-    possible,
     pump_mistakes,
     stage_mistakes,
 )
@@ -115,18 +113,14 @@ def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measur
     }
     if off <= allowed:
         return Measured(subject="all points", verdict=Verdict.PASS, limit=limits.power_balance, evidence=evidence)
-    mistakes = mistakes_that_close(
-        middle,
-        BALANCE,
-        (
-            *possible(UNIT_MISTAKES, headings_of(case.curve)),
-            *stage_mistakes(bid.stages),
-            *pump_mistakes(case.inquiry.duty.pumps_running),
-            *frequency_mistakes(),
-            *density_mistakes(case.inquiry.liquid.density),
-            *motor_mistakes(bid.driver.efficiency),
-        ),
+    others = (
+        *stage_mistakes(bid.stages),
+        *pump_mistakes(case.inquiry.duty.pumps_running),
+        *frequency_mistakes(),
+        *density_mistakes(case.inquiry.liquid.density),
+        *motor_mistakes(bid.driver.efficiency),
     )
+    mistakes = closing(middle, BALANCE, others, headings_of(case.curve))
     if mistakes:
         evidence["mistakes"] = text(in_words(mistakes))
         return Measured(

@@ -13,13 +13,12 @@ from bidcheck.checks.request import not_applicable
 from bidcheck.checks.verdicts import missed
 from bidcheck.curve import COLUMN_WORDS, COLUMNS, Column, Fit
 from bidcheck.explain import (
-    UNIT_MISTAKES,
+    closing,
     density_mistakes,
     frequency_mistakes,
     in_words,
     mistakes_that_close,
     motor_mistakes,
-    possible,
     pump_mistakes,
     stage_mistakes,
 )
@@ -106,8 +105,7 @@ def _mistakes(case: Case, column: Column, gap: float, unit: float) -> tuple[str,
         return ()
     bid = case.bid
     motor = motor_mistakes(bid.driver.efficiency)
-    in_claim = (
-        *possible(UNIT_MISTAKES, {column: unit}),
+    others = (
         *stage_mistakes(bid.stages),
         *pump_mistakes(case.inquiry.duty.pumps_running),
         *frequency_mistakes(),
@@ -115,7 +113,8 @@ def _mistakes(case: Case, column: Column, gap: float, unit: float) -> tuple[str,
         *motor,
     )
     in_curve = mistakes_that_close(1.0 / gap, {column: 1}, motor)
-    return (*mistakes_that_close(gap, {column: 1}, in_claim), *(f"in the curve {words}" for words in in_curve))
+    in_claim = closing(gap, {column: 1}, others, {column: unit})
+    return (*in_claim, *(f"in the curve {words}" for words in in_curve))
 
 
 CHECK = Check(

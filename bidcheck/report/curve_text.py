@@ -8,7 +8,7 @@ from rich.text import Text
 
 from bidcheck.checks.power_balance import balanced_rows, headings_of
 from bidcheck.curve import COLUMN_KINDS, COLUMN_WORDS, COLUMNS, Curve, Fit, Fits, Floats
-from bidcheck.explain import BALANCE, UNIT_MISTAKES, frequency_mistakes, in_words, mistakes_that_close, possible
+from bidcheck.explain import BALANCE, closing, frequency_mistakes, in_words
 from bidcheck.hydraulics.specific_speed import specific_speed, suction_specific_speed
 from bidcheck.quantity import Kind, UnitSystem
 from bidcheck.report.format import bare, figure, plain
@@ -116,13 +116,12 @@ def _print_balance(fits: Fits, curve: Curve, console: Console, system: UnitSyste
     odd = {point.line for point in fits.odd_points}
     sound = [float(gap) for line, gap in zip(lines, gaps, strict=True) if int(line) not in odd] or gaps.tolist()
     middle, allowed = median(sound), float(median(tolerances.tolist()))
-    mistakes = (*possible(UNIT_MISTAKES, headings_of(curve)), *frequency_mistakes())
-    closing = mistakes_that_close(middle, BALANCE, mistakes)
+    mistakes = closing(middle, BALANCE, frequency_mistakes(), headings_of(curve))
     if abs(middle - 1.0) <= allowed:
         verdict = "power balance: head, power and efficiency agree within the printed digits"
     else:
         verdict = f"power balance: ρgQH/P comes to {figure(middle, Kind.SHARE, system)} of the stated efficiency; "
-        verdict += f"it looks as if {in_words(closing)}" if closing else "no single mistake explains it"
+        verdict += f"it looks as if {in_words(mistakes)}" if mistakes else "no single mistake explains it"
     console.print(Text(verdict))
     console.print()
     print_trimmed(_balance_table(flows, gaps, tolerances, system), console)

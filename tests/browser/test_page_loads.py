@@ -81,7 +81,7 @@ def test_the_first_table_with_every_outcome_is_on_the_first_screen(opened):
 def test_figures_are_seen_and_their_labels_stay_inside(opened):
     page, _, _ = opened
     figures = page.locator("figure svg")
-    assert figures.count() == 3
+    assert figures.count() == 4
     outside = page.evaluate(
         """() => [...document.querySelectorAll('figure svg')].flatMap(svg => {
             const box = svg.getBoundingClientRect();

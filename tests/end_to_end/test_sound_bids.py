@@ -9,7 +9,7 @@ import pytest
 import bidcheck
 from bidcheck import Outcome, Verdict
 from bidcheck.inquiry import Inquiry
-from tests.sound_bids import sound_inquiry
+from tests.sound_bids import UNLIKE, sound_inquiry, unlike_inquiry
 
 
 def verdicts(inquiry: Inquiry) -> dict[str, Verdict]:
@@ -87,3 +87,32 @@ def test_planted_defects_are_caught_by_the_check_meant_for_them(column, factor, 
         found = verdicts(replace(inquiry, bids=(replace(bid, curves=(replace(curve, **changed),)),)))
         assert found[check] is verdict
         assert all(one is not Verdict.FAIL for name, one in found.items() if name != check)
+
+
+@pytest.mark.parametrize("arrangement", UNLIKE)
+def test_honest_wastewater_borehole_and_sealless_pumps_get_nothing_above_a_remark(arrangement):
+    rng = np.random.default_rng(15)
+    for _ in range(40):
+        found = verdicts(unlike_inquiry(rng, arrangement))
+        assert [name for name, verdict in found.items() if verdict in (Verdict.QUERY, Verdict.FAIL)] == []
+
+
+@pytest.mark.parametrize(("drive", "kept", "words"), [("fixed", 0.93, "pump and motor"), ("variable", 0.90, "wire")])
+def test_losses_of_motor_and_converter_are_named_where_efficiency_is_low(drive, kept, words):
+    rng = np.random.default_rng(16)
+    low = 0
+    for _ in range(60):
+        inquiry = sound_inquiry(rng)
+        (bid,) = inquiry.bids
+        (curve,) = bid.curves
+        lowered = replace(curve, efficiency=replace(curve.efficiency, value=curve.efficiency.value * kept), power=None)
+        driver = replace(bid.driver, efficiency=0.93)
+        bid = replace(
+            bid, drive=drive, driver=driver, claims=replace(bid.claims, bep_efficiency=None), curves=(lowered,)
+        )
+        (judged,) = bidcheck.evaluate(replace(inquiry, bids=(bid,))).bids
+        (claim,) = (f for f in judged.findings if f.check == "efficiency-claim")
+        if claim.verdict in (Verdict.REMARK, Verdict.QUERY):
+            low += 1
+            assert words in str(claim.evidence["causes"].value)
+    assert low >= 10

@@ -2,6 +2,7 @@ import pytest
 
 from bidcheck.explain import (
     UNIT_MISTAKES,
+    closing,
     density_mistakes,
     frequency_mistakes,
     mistakes_that_close,
@@ -75,3 +76,11 @@ def test_a_mistake_needs_the_heading_it_happens_under():
     assert mistakes_that_close(gap, BALANCE, possible(UNIT_MISTAKES, {"power": 1000.0})) == ()
     assert words in mistakes_that_close(gap, BALANCE, possible(UNIT_MISTAKES, {"power": 0.0}))
     assert words not in mistakes_that_close(gap, BALANCE, possible(UNIT_MISTAKES, {"power": 735.49875}))
+
+
+def test_what_cannot_have_happened_under_the_heading_happened_before():
+    power = {"power": 1000.0}
+    (words,) = closing(1.341, BALANCE, (), power)
+    assert words == "power is in kW under a hp heading, before it was converted"
+    assert closing(1 / 1.341, BALANCE, (), power) == ("power is in hp under a kW heading",)
+    assert closing(1.0, BALANCE, (), power) == ()

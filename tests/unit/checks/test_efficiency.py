@@ -2,9 +2,12 @@ from dataclasses import replace
 
 import pytest
 
+from bidcheck.bid import Driver
 from bidcheck.case import Case
 from bidcheck.checks import efficiency_ceiling, efficiency_claim
 from bidcheck.finding import Verdict
+from bidcheck.inquiry import Liquid
+from tests.build import sound_curve
 from tests.unit.checks.judge import judge, sound_case
 
 LADDER = {
@@ -112,3 +115,68 @@ def test_a_ceiling_without_a_diameter_does_not_speak_of_one():
     finding = judge(efficiency_ceiling.CHECK, bare)["best efficiency"]
     assert finding.verdict is Verdict.FAIL
     assert "your own impeller" not in finding.wording.question
+
+
+@pytest.mark.parametrize(
+    ("efficiency", "driver", "drive", "named"),
+    [
+        (0.73, Driver(efficiency=0.95), "fixed", ("the motor offered, 95.0 %",)),
+        (0.73, Driver(rating=110e3), "fixed", ("an ordinary motor of this size, 95.4 %",)),
+        (0.70, Driver(efficiency=0.95), "variable", ("wire to water",)),
+        (0.65, Driver(efficiency=0.95), "fixed", ()),
+        (0.73, Driver(efficiency=0.95), "variable", ("the motor offered", "wire to water")),
+    ],
+)
+def test_losses_of_the_motor_are_named_where_they_explain_a_low_claim(efficiency, driver, drive, named):
+    finding = judge(efficiency_claim.CHECK, low_claim(efficiency, driver, drive))["best efficiency"]
+    causes = str(finding.evidence["causes"].value) if "causes" in finding.evidence else ""
+    assert all(words in causes for words in named)
+    assert bool(causes) is bool(named)
+    assert ("Likely cause" in finding.wording.message or "would explain" in finding.wording.message) is bool(named)
+
+
+def low_claim(efficiency: float, driver: Driver, drive: str) -> Case:
+    """A low claim of a bid with this driver."""
+    case = claimed(efficiency)
+    return replace(case, bid=replace(case.bid, driver=driver, drive=drive))
+
+
+def test_a_plausible_claim_is_not_explained():
+    finding = judge(efficiency_claim.CHECK, low_claim(0.76, Driver(efficiency=0.95), "fixed"))["best efficiency"]
+    assert finding.verdict is Verdict.PASS
+    assert "causes" not in finding.evidence
+
+
+def viscous(efficiency: float, viscosity: float = 60e-6) -> Case:
+    """The sound curve at a fifth of its size, as pumped in a viscous liquid, its efficiency multiplied."""
+    curve = sound_curve(liquid="as pumped", power=None)
+    assert curve.efficiency is not None
+    assert curve.head is not None
+    assert curve.npsh3 is not None
+    small = {
+        "head": replace(curve.head, flow=curve.head.flow * 0.3),
+        "efficiency": replace(
+            curve.efficiency, flow=curve.efficiency.flow * 0.3, value=curve.efficiency.value * efficiency
+        ),
+        "npsh3": replace(curve.npsh3, flow=curve.npsh3.flow * 0.3),
+    }
+    oil = Liquid(name="oil", density=880.0, viscosity=viscosity)
+    return sound_case({"curves": (replace(curve, **small),)}, liquid=oil)
+
+
+def test_a_viscous_curve_is_brought_to_water_and_a_remark_at_most():
+    case = viscous(0.8)
+    assert case.estimates.corrected
+    offered = case.estimates.offered_efficiency
+    assert offered is not None
+    assert offered > 0.8 * 0.825  # the correction gives back what viscosity cost
+    assert "brought from the viscous liquid to water" in case.estimates.basis
+    found = judge(efficiency_claim.CHECK, viscous(0.9))
+    assert found["best efficiency"].verdict is Verdict.REMARK
+    assert found["water curve"].verdict is Verdict.NO_DATA
+
+
+def test_outside_the_limits_of_the_correction_nothing_is_judged():
+    case = viscous(0.9, viscosity=4e-3)
+    assert case.estimates.nq is None
+    assert judge(efficiency_claim.CHECK, case)["best efficiency"].verdict is Verdict.NO_DATA

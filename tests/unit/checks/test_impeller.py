@@ -140,7 +140,8 @@ def test_units_of_head_are_named_only_where_the_curve_misses_the_duty():
     case = sound_case({"curves": (feet,), **FITTING})
     assert "head is in ft under an m heading" in likely_causes(case)
     in_feet = replace(feet, head=replace(feet.head, value_unit=0.3048))
-    assert not any("head is in ft" in words for words in likely_causes(sound_case({"curves": (in_feet,), **FITTING})))
+    in_feet_case = sound_case({"curves": (in_feet,), **FITTING})
+    assert "head is in ft under an m heading, before it was converted" in likely_causes(in_feet_case)
     assert not any("head is in" in words for words in likely_causes(with_ratio(3.281)))
 
 

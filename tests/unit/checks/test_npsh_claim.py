@@ -53,9 +53,10 @@ def test_the_steps(nss, verdict, words):
     ("nss", "unit", "named"),
     [
         (22000, 0.3048, "in m under a ft heading"),
-        (22000, 1.0, ""),
+        (22000, 1.0, "in m under a ft heading, before it was converted"),
         (3700, 1.0, "in ft under an m heading"),
-        (3700, 0.3048, ""),
+        (3700, 0.3048, "in ft under an m heading, before it was converted"),
+        (40000, 1.0, ""),
     ],
 )
 def test_metres_and_feet(nss, unit, named):

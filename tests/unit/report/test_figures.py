@@ -12,9 +12,11 @@ from bidcheck.quantity import UnitSystem
 from bidcheck.report.drawing import LOOKS, spread
 from bidcheck.report.figures import curve_figure, efficiency_figure, head_figure, npsh_figure, without
 from bidcheck.report.overlays import available, highest_npsh3, margins_wanted
+from bidcheck.report.window_map import off_the_map, window_figure
 from tests.build import EXAMPLES, inquiry, points, sound_bid, sound_curve
 
-FIGURES = [head_figure, efficiency_figure, npsh_figure]
+CURVES = [head_figure, efficiency_figure, npsh_figure]
+FIGURES = [*CURVES, window_figure]
 
 
 def evaluated(*bids, **changes) -> Evaluation:
@@ -41,7 +43,7 @@ def test_a_figure_is_the_same_bytes_each_time_and_well_formed(example, draw, sys
     assert "<!DOCTYPE" not in svg
 
 
-def test_the_ids_of_three_figures_never_meet(example):
+def test_the_ids_of_the_figures_never_meet(example):
     ids = [one for draw in FIGURES for one in re.findall(r'\bid="([^"]+)"', draw(example, UnitSystem.SI))]
     assert len(ids) == len(set(ids))
 
@@ -67,7 +69,7 @@ def test_axes_name_their_units(example, draw, si, us):
     assert {"flow [US gpm]", us} <= set(texts(draw(example, UnitSystem.US)))
 
 
-@pytest.mark.parametrize("draw", FIGURES)
+@pytest.mark.parametrize("draw", CURVES)
 def test_every_bid_with_the_curve_is_named_at_it(example, draw):
     found = texts(draw(example, UnitSystem.SI))
     column = {head_figure: "head", efficiency_figure: "efficiency", npsh_figure: "npsh3"}[draw]
@@ -93,7 +95,7 @@ def test_a_bid_without_curves_is_left_out_and_named(draw):
     assert without(evaluation, "head") == without(evaluation, "npsh3") == ["cedar a"]
 
 
-@pytest.mark.parametrize("draw", FIGURES)
+@pytest.mark.parametrize("draw", CURVES)
 def test_no_bid_at_all_still_draws_axes(draw):
     evaluation = bidcheck.evaluate(inquiry(bids=()))
     assert "flow [m³/h]" in texts(draw(evaluation, UnitSystem.SI))
@@ -182,3 +184,21 @@ def test_npsh_available_is_known_only_where_the_inquiry_gives_it():
     nothing = evaluated(duty=replace(base, npsha=None, npsha_at_max_flow=None))
     assert available(nothing) == []
     assert "available" not in texts(npsh_figure(nothing, UnitSystem.SI))
+
+
+def test_every_bid_stands_on_the_map_of_specific_speed(example):
+    svg = window_figure(example, UnitSystem.SI)
+    words = texts(svg)
+    assert {bid.case.bid.name for bid in example.bids} <= set(words)
+    assert {"best efficiency flow [m³/h]", "specific speed, total flow nq", "500", "20"} <= set(words)
+    assert off_the_map(example) == []
+    us = texts(window_figure(example, UnitSystem.US))
+    assert {"best efficiency flow [US gpm]", "specific speed, total flow [US]", "1000"} <= set(us)
+
+
+def test_a_bid_without_a_best_efficiency_is_named_beneath_the_map():
+    bare = sound_bid(bidder="birch", curves=(sound_curve(efficiency=None, power=None),))
+    evaluation = evaluated(sound_bid(), bare)
+    assert off_the_map(evaluation) == ["birch a"]
+    assert "birch a" not in texts(window_figure(evaluation, UnitSystem.SI))
+    assert window_figure(evaluated(bare), UnitSystem.SI) == ""

@@ -89,3 +89,30 @@ def test_nothing_infinite_and_the_same_bytes_again():
     case = replace(evaluation.bids[0].case, estimates=replace(evaluation.bids[0].case.estimates, nq=float("nan")))
     odd = replace(evaluation, bids=(replace(evaluation.bids[0], case=case),))
     assert json.loads(evaluation_json(odd))["bids"][0]["specific_speed"]["nq"] is None
+
+
+def test_every_source_of_every_bid_is_given_with_range_and_applicability(document):
+    for bid in document["bids"]:
+        estimates = bid["estimates"]
+        groups = [
+            estimates["efficiency"]["sources"],
+            estimates["head_coefficient"]["sources"],
+            estimates["npsh3"]["sources"],
+            *(ratio["sources"] for ratio in estimates["shape"].values()),
+        ]
+        assert all(groups)
+        for source in (source for group in groups for source in group):
+            assert source["valid"]
+            assert (source["value"] is None) == bool(source["reason"])
+            assert source["mark"] in ("text", "crossed", "memory", "practice", "derived")
+        names = " ".join(source["name"] for source in groups[0])
+        for part in (
+            "market survey, median",
+            "floor since 2015",
+            "US minimum",
+            "statistics",
+            "chart",
+            "ceiling",
+            "context",
+        ):
+            assert part in names
