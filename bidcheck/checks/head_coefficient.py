@@ -21,6 +21,11 @@ from bidcheck.limits import within
 from bidcheck.second_opinion import ImpellerEstimate
 
 
+EXTREME = (0.4, 2.0)
+"""Head coefficient over the expected one, beyond which not even recessed or mixed flow impellers lie. Source: common
+practice, no source."""
+
+
 def run(case: Case) -> Iterator[Measured]:
     """Compare the head coefficient at best efficiency with the expected one."""
     impeller = case.estimates.impeller
@@ -54,11 +59,16 @@ def _placed(case: Case, impeller: ImpellerEstimate, found: float) -> Measured:
     verdict = missed(limit, Verdict.QUERY)
     return Measured(
         subject="best efficiency",
-        verdict=verdict if causes and not far.holds else at_most_remark(case.bid, verdict),
+        verdict=verdict if causes and _extreme(found) else at_most_remark(case.bid, verdict),
         limit=limit,
         evidence=evidence,
         wording="explained" if causes else "far",
     )
+
+
+def _extreme(found: float) -> bool:
+    """Whether no impeller of any arrangement explains the coefficient, so that a mistake is asked about in all."""
+    return not EXTREME[0] <= found <= EXTREME[1]
 
 
 def _evidence(case: Case, impeller: ImpellerEstimate, found: float) -> dict[str, Evidence]:

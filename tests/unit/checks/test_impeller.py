@@ -70,6 +70,11 @@ def test_unlike_arrangements_get_a_remark_inside_what_impellers_show(arrangement
     assert coefficient(with_ratio(0.70, arrangement)).verdict is Verdict.REMARK
 
 
+@pytest.mark.parametrize(("ratio", "verdict"), [(0.5, Verdict.REMARK), (1.9, Verdict.REMARK), (0.25, Verdict.QUERY)])
+def test_unlike_arrangements_are_asked_only_where_no_impeller_explains_it(ratio, verdict):
+    assert coefficient(with_ratio(ratio, "solids handling")).verdict is verdict
+
+
 def test_without_a_diameter_it_is_asked_for():
     bare = sound_case({"curves": (sound_curve(impeller=None),), "impeller_rated": None, "impeller_max": None})
     assert coefficient(bare).verdict is Verdict.NO_DATA
