@@ -20,7 +20,6 @@ from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
 from bidcheck.limits import within
 from bidcheck.second_opinion import ImpellerEstimate
 
-
 EXTREME = (0.4, 2.0)
 """Head coefficient over the expected one, beyond which not even recessed or mixed flow impellers lie. Source: common
 practice, no source."""

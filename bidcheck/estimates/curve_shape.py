@@ -175,23 +175,25 @@ def sketch_efficiency(nq: float, flow_over_bep: float) -> float:
     return _between(nq, [float(np.interp(flow_over_bep, _SHARE, row)) for row in _EFFICIENCY])
 
 
-def _asked(name: str, valid: str, mark: str, origin: str, value: Callable[[], float]) -> Source:
+def _asked(
+    name: str, valid: str, mark: str, origin: str, *, value: Callable[[], float], kind: Kind = Kind.RATIO
+) -> Source:
     """One source of a ratio, or why it gives none."""
     try:
-        return Source(name, value(), valid, "", mark, origin, kind=Kind.RATIO)
+        return Source(name, value(), valid, "", mark, origin, kind=kind)
     except OutOfRange as error:
-        return Source(name, None, valid, str(error), mark, origin, kind=Kind.RATIO)
+        return Source(name, None, valid, str(error), mark, origin, kind=kind)
 
 
-def _sketch(value: Callable[[], float]) -> Source:
-    return _asked("sketch of curve shapes", _SKETCH_RANGE, "text", _SKETCH, value)
+def _sketch(value: Callable[[], float], kind: Kind = Kind.RATIO) -> Source:
+    return _asked("sketch of curve shapes", _SKETCH_RANGE, "text", _SKETCH, value=value, kind=kind)
 
 
 def _regulation(ratio: float) -> Source:
     """Ratio of the load points of the regulation: one figure for all pumps of its scope."""
     origin = "Regulation (EU) No 547/2012, Annex III"
     return Source(
-        "load points of the regulation", ratio, "pumps for clean water", "", "memory", origin, kind=Kind.RATIO
+        "load points of the regulation", ratio, "pumps for clean water", "", "memory", origin, kind=Kind.SHARE
     )
 
 
@@ -221,7 +223,7 @@ def shutoff_head_shape(nq: float, offered: float | None) -> ShapeRatio:
     [1.41, 1.44]
     """
     origin = "Gülich, Centrifugal Pumps, head coefficients at shutoff and at best efficiency"
-    coefficients = _asked("head coefficients", "nq 7 to 100", "memory", origin, lambda: shutoff_head_ratio(nq))
+    coefficients = _asked("head coefficients", "nq 7 to 100", "memory", origin, value=lambda: shutoff_head_ratio(nq))
     return ShapeRatio(offered, (_sketch(lambda: sketch_shutoff_head(nq)), coefficients))
 
 
@@ -281,4 +283,4 @@ def efficiency_shape(nq: float, flow_over_bep: float, offered: float | None) -> 
     [0.93, 0.947]
     """
     ratio = PART_LOAD if flow_over_bep < 1.0 else OVER_LOAD
-    return ShapeRatio(offered, (_sketch(lambda: sketch_efficiency(nq, flow_over_bep)), _regulation(ratio)))
+    return ShapeRatio(offered, (_sketch(lambda: sketch_efficiency(nq, flow_over_bep), Kind.SHARE), _regulation(ratio)))

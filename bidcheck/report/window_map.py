@@ -111,7 +111,7 @@ def _draw_window(axes: "Axes", flows: Floats, system: UnitSystem) -> None:
         axes.plot(x, inside, color="#444444", linewidth=1.4, zorder=2)
         axes.annotate(
             words,
-            (x[2], edge[2]),
+            (x[STEPS // 3], edge[STEPS // 3]),
             xytext=(0, 5 if above else -5),
             textcoords="offset points",
             fontsize=8,
@@ -138,7 +138,19 @@ def _draw_attainable(axes: "Axes", flows: Floats, system: UnitSystem) -> None:
     x = [_log_flow(float(flow), system) for flow in flows]
     y = [_log_speed(float(nq), system) for nq in speeds]
     lines = axes.contour(x, y, np.ma.masked_invalid(grid), levels=LINES, colors=INK, linewidths=0.8, zorder=1)
-    axes.clabel(lines, fmt="%d %%", fontsize=8, colors=INK)
+    places = [place for level in LINES if (place := _label_place(grid, level)) is not None]
+    spots = [(x[column], y[row]) for row, column in places]
+    axes.clabel(lines, fmt="%d %%", fontsize=8, colors=INK, manual=spots)
+
+
+def _label_place(grid: Floats, level: float) -> tuple[int, int] | None:
+    """Row and column where a line is labelled: near the right edge, else near the left; None where it is at neither."""
+    for column in (STEPS - 6, 5):
+        values = grid[:, column]
+        crossed = np.flatnonzero((values[:-1] < level) & (values[1:] >= level))
+        if crossed.size:
+            return int(crossed[0]), column
+    return None
 
 
 def _ticks(axes: "Axes") -> None:
