@@ -154,7 +154,13 @@ def _estimates(bid: Bid, curve: Curve, fits: Fits, best: Best) -> Estimates:
             shutoff_head_per_stage=None if shutoff is None else shutoff / bid.stages,
         ),
         shape=shape,
-        suction=estimate_suction(bid.speed_rpm, eye_flow, npsh3, _growth(fits.npsh3, best.flow)),
+        suction=estimate_suction(
+            bid.speed_rpm,
+            eye_flow,
+            offered=npsh3,
+            growth=_growth(fits.npsh3, best.flow),
+            inducer=bid.inducer,
+        ),
         regulation=_regulation(bid, nq_eye, best, shape, fits.head),
     )
 

@@ -95,7 +95,10 @@ class Limits:
     efficiency_shape: Limit = named(
         Kind.POINTS, "efficiency at 75 and 110 % of best efficiency flow over the best, beyond what is expected"
     )
-    efficiency_shape_far: Limit = named(Kind.POINTS, "the same, from where it is asked about")
+    efficiency_shape_far: Limit = named(
+        Kind.POINTS,
+        "efficiency at 75 and 110 % of best efficiency flow beyond what is expected, from where it is asked about",
+    )
     minimum_efficiency_index: Limit = named(Kind.RATIO, "minimum efficiency index of the European regulation")
     us_power_ratio: Limit = named(
         Kind.SHARE, "shaft power over that of the least efficient pump the United States rule allows"
@@ -130,7 +133,9 @@ class Limits:
     npsh_fall: Limit = named(Kind.SHARE, "fall of NPSH3 with rising flow above 60 % of best efficiency flow")
     npsh_growth: Limit = named(Kind.RATIO, "exponent of flow with which NPSH3 rises beyond best efficiency")
     head_coefficient: Limit = named(Kind.RATIO, "head coefficient over that expected for the specific speed")
-    head_coefficient_far: Limit = named(Kind.RATIO, "the same, from where it is asked about without a likely cause")
+    head_coefficient_far: Limit = named(
+        Kind.RATIO, "head coefficient over that expected, outside which it is asked about even without a likely cause"
+    )
     tip_speed: Limit = named(Kind.TIP_SPEED, "speed of the impeller's outer edge, up to which grey cast iron is usual")
     shutoff_droop: Limit = named(Kind.SHARE, "fall of the head curve towards shutoff over shutoff head")
     shutoff_head_ordinary: Limit = named(Kind.WHOLE_SHARE, "shutoff head over head at best efficiency, always in order")

@@ -25,7 +25,7 @@ def run(case: Case) -> Iterator[Measured]:
     if fit is None or points is None:
         yield asked_for_curve(case, "towards shutoff")
         return
-    if not fit.covers(0.0):
+    if not fit.covers(0.0) or fit.at(0.0) <= 0.0:
         yield asked("towards shutoff", "shutoff head")
         return
     odd = {point.line for point in case.fits.odd_points if point.column == "head"} if case.fits is not None else set()
@@ -69,7 +69,7 @@ def _points_droop(points: Points, leave_out: set[int]) -> float:
     """How far the first point lies below the highest one, as a share of it."""
     keep = ~np.isin(points.line, list(leave_out))
     values = points.value[keep]
-    return max(float(values.max() / values[0]) - 1.0, 0.0)
+    return max(float(values.max() / values[0]) - 1.0, 0.0) if values[0] > 0 else 1.0
 
 
 CHECK = Check(

@@ -8,6 +8,7 @@ speed and flow of the same bid – unless one mistake in diameter, speed or stag
 from collections.abc import Iterator
 
 from bidcheck.case import Case
+from bidcheck.checks.derived_efficiency import mistakes_behind
 from bidcheck.checks.evidence import points, share, text
 from bidcheck.checks.impeller_causes import likely_causes
 from bidcheck.checks.request import asked, not_applicable
@@ -42,7 +43,7 @@ def run(case: Case) -> Iterator[Measured]:
     }
     evidence |= {name.replace(" ", "_"): share(loss) for name, loss in estimate.ceiling_terms.items()}
     compared = within(claim, limit, slack=doubt)
-    causes = () if compared.holds else likely_causes(case)
+    causes = () if compared.holds else (*likely_causes(case), *mistakes_behind(case))
     if causes:
         evidence["causes"] = text(in_words(causes))
         yield Measured(

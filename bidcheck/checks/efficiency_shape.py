@@ -11,7 +11,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import points, share, text, whole_share
-from bidcheck.checks.request import asked
+from bidcheck.checks.request import asked, not_applicable
 from bidcheck.checks.unlike import at_most_remark
 from bidcheck.checks.verdicts import missed
 from bidcheck.estimates.curve_shape import OVER, PART
@@ -35,7 +35,8 @@ def _compared(case: Case, subject: str, flow_over_bep: float, ratio: ShapeRatio)
     """One ratio against the range of the sources."""
     if ratio.offered is None:
         return asked(subject, "efficiency beside best efficiency")
-    assert ratio.expected is not None  # the load points of the regulation hold for any specific speed
+    if ratio.expected is None:
+        return not_applicable(subject, ratio.sources[0].reason)
     low, high = ratio.expected
     beyond = max(low - ratio.offered, ratio.offered - high, 0.0)
     limits, doubt = case.inquiry.limits, _doubt(case, flow_over_bep)

@@ -21,7 +21,7 @@ def run(case: Case) -> Iterator[Measured]:
         yield Measured(subject="head curve", verdict=Verdict.PASS)
     efficiency_or_power = at.efficiency is not None or at.power is not None
     yield from _need("efficiency or power", "efficiency or power", efficiency_or_power, decisive=True)
-    yield from _need("NPSH3", "NPSH3 at rated flow", at.npsh3 is not None, decisive=True)
+    yield from _need("NPSH3", "NPSH3 at rated flow", at.npsh3 is not None and at.npsh3 > 0.0, decisive=True)
     yield from _need("driver rating", "driver rating", bid.driver.rating is not None, decisive=True)
     if any(curve.power_at == "motor input" for curve in bid.curves):
         yield from _need("motor efficiency", "motor efficiency", bid.driver.efficiency is not None)

@@ -21,7 +21,7 @@ def run(case: Case) -> Iterator[Measured]:
     for subject, at in case.operating:
         if subject not in REQUESTED:
             continue
-        if at.npsh3 is None:
+        if at.npsh3 is None or at.npsh3 <= 0.0:
             yield asked(subject, REQUESTED[subject], decisive=subject == "rated")
         elif at.npsha is None:
             yield ours(subject, f"NPSH available at {'rated flow' if subject == 'rated' else 'the largest flow'}")

@@ -11,13 +11,14 @@ from collections.abc import Iterator
 import numpy as np
 
 from bidcheck.case import Case
+from bidcheck.checks.derived_efficiency import mistakes_behind
 from bidcheck.checks.evidence import flow, share, text
+from bidcheck.checks.headings import headings_of
 from bidcheck.checks.request import asked, not_applicable
 from bidcheck.checks.verdicts import missed
 from bidcheck.curve import Column, Curve, Floats, Points
 from bidcheck.explain import (
     BALANCE,
-    Quantity,
     closing,
     density_mistakes,
     frequency_mistakes,
@@ -44,7 +45,7 @@ def run(case: Case) -> Iterator[Measured]:
         if curve.efficiency is None and curve.power is None:
             yield asked("all points", "efficiency or power")
         else:
-            yield not_applicable("all points", "only one of efficiency and power is stated, nothing to compare it with")
+            yield _derived(case)
         return
     odd = {(point.column, point.line) for point in case.fits.odd_points} if case.fits is not None else set()
     rows = balanced_rows(curve, odd)
@@ -53,6 +54,25 @@ def run(case: Case) -> Iterator[Measured]:
         return
     yield _systematic(case, *rows[1:])
     yield from _single_points(case, *rows)
+
+
+def _derived(case: Case) -> Measured:
+    """One of efficiency and power stated: nothing to compare, but efficiency that follows cannot exceed 100 %."""
+    fit = case.fits.efficiency if case.fits is not None else None
+    best = case.fits.bep.efficiency if case.fits is not None and case.fits.bep is not None else 0.0
+    top = max(best, *(fit.at(flow) for flow in fit.domain)) if fit is not None and fit.derived else 0.0
+    if top <= 1.0:
+        return not_applicable("all points", "only one of efficiency and power is stated, nothing to compare it with")
+    evidence = {"follows": share(top)}
+    causes = mistakes_behind(case)
+    if causes:
+        evidence["mistakes"] = text(in_words(causes))
+    return Measured(
+        subject="all points",
+        verdict=Verdict.QUERY if causes else Verdict.FAIL,
+        evidence=evidence,
+        wording="impossible, explained" if causes else "impossible",
+    )
 
 
 def balanced_rows(curve: Curve, leave_out: set[tuple[Column, int]]) -> tuple[Floats, Floats, Floats, Floats]:
@@ -148,13 +168,6 @@ def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measur
     )
 
 
-def headings_of(curve: Curve | None) -> dict[Quantity, float]:
-    """One unit of each heading in SI, 0 where not known."""
-    if curve is None or curve.head is None or curve.power is None:
-        return {}
-    return {"flow": curve.head.flow_unit, "head": curve.head.value_unit, "power": curve.power.value_unit}
-
-
 def _single_points(case: Case, line: Floats, Q: Floats, gap: Floats, tolerance: Floats) -> Iterator[Measured]:
     """Points that fall out of the balance the others keep."""
     limit = case.inquiry.limits.power_balance
@@ -187,6 +200,16 @@ CHECK = Check(
         "": Wording(
             "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, in the"
             " middle of all points; printed digits leave {tolerance}."
+        ),
+        "impossible": Wording(
+            "Efficiency that follows from flow, head and power reaches {follows}: more power leaves the pump than"
+            " enters it.",
+            "Your flow, head and shaft power give an efficiency of {follows}. Please correct the figures.",
+        ),
+        "impossible, explained": Wording(
+            "Efficiency that follows from flow, head and power reaches {follows}. It would be explained if {mistakes}.",
+            "Your flow, head and shaft power give an efficiency of {follows}. It looks as if {mistakes}. Please confirm"
+            " and correct.",
         ),
         "off": Wording(
             "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, in the"

@@ -2,9 +2,10 @@
 
 Held against the regulations the inquiry names under [site], and only where their scope covers the pump: kind, size,
 head, speed, clean water. The European index is read from three load points of the bidder's curve at the largest
-diameter given; a trimmed curve gets what trimming may have cost. The United States rule judges an index with the motor,
-so there the offered curve against the least efficient pump allowed is a remark. A curve is not a type test: the bidder
-states the index, the program asks where its own reading falls short.
+diameter given; where what trimming may have cost and the doubt of the fit would make up for a miss, that is a remark.
+The United States rule judges an index with the motor, so there the offered curve against the least efficient pump
+allowed is a remark. A curve is not a type test: the bidder states the index, the program asks where its own reading
+falls short.
 """
 
 from collections.abc import Iterator
@@ -61,9 +62,11 @@ def _eu(case: Case, found: RegulationEstimate) -> Measured:
         "load_points": count(found.eu_points),
         "basis": text(estimates.basis),
     }
-    compared = within(found.eu_index, case.inquiry.limits.minimum_efficiency_index, slack=slack)
+    limit = case.inquiry.limits.minimum_efficiency_index
     words = "eu" if found.eu_points > 1 else "eu, one point"
-    return Measured(subject=EU, holds=compared, evidence=evidence, wording=words)
+    if within(found.eu_index, limit).holds or not within(found.eu_index, limit, slack=slack).holds:
+        return Measured(subject=EU, holds=within(found.eu_index, limit), evidence=evidence, wording=words)
+    return Measured(subject=EU, verdict=Verdict.REMARK, limit=limit, evidence=evidence, wording="eu, near")
 
 
 def _us(case: Case, found: RegulationEstimate) -> Measured:
@@ -98,6 +101,11 @@ CHECK = Check(
             " regulation looks at three load points.",
             "Your best efficiency reads as a minimum efficiency index of about {index}; the regulation asks for 0.40."
             " Please state the index of this pump at full diameter and the test behind it.",
+        ),
+        "eu, near": Wording(
+            "Minimum efficiency index of the offered curve is about {index}, below what the regulation asks for by no"
+            " more than trimming and the fit may explain ({class}; {basis}). Ask for the index of the full diameter"
+            " before award."
         ),
         "us": Wording(
             "Shaft power over the load points of the rule is {ratio} of that of the least efficient pump it allows"

@@ -29,6 +29,9 @@ LOWEST_NQ, HIGHEST_NQ = 10.0, 200.0
 PART, OVER = 0.75, 1.10
 """Shares of best efficiency flow at which efficiency is looked at. Source: load points of (EU) No 547/2012."""
 
+REGULATED_NQ = (6.0, 80.0)
+"""Specific speeds of the regulation's scope. Source: Regulation (EU) No 547/2012, Article 1."""
+
 _SKETCH = "Hydraulic Institute, sketch of curve shapes, read by pixel, approximate"
 _SKETCH_RANGE = "nq 20 to 200 per suction eye, held down to nq 10"
 
@@ -189,11 +192,16 @@ def _sketch(value: Callable[[], float], kind: Kind = Kind.RATIO) -> Source:
     return _asked("sketch of curve shapes", _SKETCH_RANGE, "text", _SKETCH, value=value, kind=kind)
 
 
-def _regulation(ratio: float) -> Source:
+def _regulation(nq: float, ratio: float) -> Source:
     """Ratio of the load points of the regulation: one figure for all pumps of its scope."""
+
+    def value() -> float:
+        require_inside("specific speed nq", nq, *REGULATED_NQ)
+        return ratio
+
     origin = "Regulation (EU) No 547/2012, Annex III"
-    return Source(
-        "load points of the regulation", ratio, "pumps for clean water", "", "memory", origin, kind=Kind.SHARE
+    return _asked(
+        "load points of the regulation", "clean water, nq 6 to 80", "memory", origin, value=value, kind=Kind.SHARE
     )
 
 
@@ -283,4 +291,6 @@ def efficiency_shape(nq: float, flow_over_bep: float, offered: float | None) -> 
     [0.93, 0.947]
     """
     ratio = PART_LOAD if flow_over_bep < 1.0 else OVER_LOAD
-    return ShapeRatio(offered, (_sketch(lambda: sketch_efficiency(nq, flow_over_bep), Kind.SHARE), _regulation(ratio)))
+    return ShapeRatio(
+        offered, (_sketch(lambda: sketch_efficiency(nq, flow_over_bep), Kind.SHARE), _regulation(nq, ratio))
+    )

@@ -62,7 +62,7 @@ def expected_npsh3(speed_rpm: float, flow_per_eye: float) -> ExpectedNpsh3:
 
 
 def estimate_suction(
-    speed_rpm: float, flow_per_eye: float, offered: float | None, growth: float | None
+    speed_rpm: float, flow_per_eye: float, *, offered: float | None, growth: float | None, inducer: bool = False
 ) -> SuctionEstimate:
     """NPSH3 at best efficiency, offered and expected.
 
@@ -76,6 +76,8 @@ def estimate_suction(
         NPSH3 the bidder states there. [m]
     growth : float or None
         Exponent of flow with which it rises beyond best efficiency.
+    inducer : bool
+        Whether an inducer is offered; then the sources give nothing.
 
     Returns
     -------
@@ -106,7 +108,15 @@ def estimate_suction(
         ("low end of the ordinary band, 7000 US", expected.high),
     )
     sources = tuple(
-        Source(name, value, valid, "", "practice", "common practice, no source", kind=Kind.NPSH)
+        Source(
+            name,
+            None if inducer else value,
+            valid,
+            "an inducer is offered" if inducer else "",
+            "practice",
+            "common practice, no source",
+            kind=Kind.NPSH,
+        )
         for name, value in values
     )
     return SuctionEstimate(

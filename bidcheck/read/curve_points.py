@@ -43,6 +43,9 @@ def read_points(headings: list[Heading], rows: Rows, source: Source) -> dict[Col
         given = [(flow, value) for flow, value in pairs if flow is not None and value is not None]
         if column == "efficiency":
             _check_efficiency(heading, [value for _, value in given], source)
+        if given and all(value.value <= 0.0 for _, value in given):
+            text = f"{column} is nowhere above zero; leave the column blank where it is not given"
+            source.problem(text, given[0][1].line)
         pairs_of[column] = _in_order(column, given, flow_heading.unit or "", source)
     if not source.problems and not any(pairs_of.values()):
         source.problem("has no figures beneath its header")

@@ -6,7 +6,8 @@ from rich.console import Console
 from rich.table import Table
 from rich.text import Text
 
-from bidcheck.checks.power_balance import balanced_rows, headings_of
+from bidcheck.checks.headings import headings_of
+from bidcheck.checks.power_balance import balanced_rows
 from bidcheck.curve import COLUMN_KINDS, COLUMN_WORDS, COLUMNS, Curve, Fit, Fits, Floats
 from bidcheck.explain import BALANCE, closing, frequency_mistakes, in_words
 from bidcheck.hydraulics.specific_speed import specific_speed, suction_specific_speed

@@ -4,7 +4,16 @@ import numpy as np
 import pytest
 
 from bidcheck.bid import Claims, Driver
-from bidcheck.checks import curve_coverage, declared_bep, missing_data, odd_point, power_balance, rated_on_curve
+from bidcheck.case import Case
+from bidcheck.checks import (
+    curve_coverage,
+    declared_bep,
+    efficiency_ceiling,
+    missing_data,
+    odd_point,
+    power_balance,
+    rated_on_curve,
+)
 from bidcheck.curve import OddPoint
 from bidcheck.finding import Verdict
 from bidcheck.inquiry import Duty
@@ -202,3 +211,28 @@ def test_every_finding_of_the_sound_bid_has_a_finite_evidence():
             for item in finding.evidence.values():
                 assert isinstance(item.value, str) or np.isfinite(item.value)
     assert sound_bid().name == "alder a"
+
+
+def power_only(factor: float) -> Case:
+    """The sound bid with power alone, so many times what it is."""
+    curve = sound_curve(efficiency=None)
+    assert curve.power is not None
+    assert curve.head is not None
+    head = replace(curve.head, flow_unit=M3H, value_unit=1.0)
+    power = replace(curve.power, value=curve.power.value * factor, flow_unit=M3H, value_unit=745.7)
+    return sound_case({"curves": (replace(curve, head=head, power=power),)})
+
+
+def test_efficiency_that_follows_cannot_exceed_all_there_is():
+    assert judge(power_balance.CHECK, power_only(0.9))["all points"].verdict is Verdict.NOT_APPLICABLE
+    explained = judge(power_balance.CHECK, power_only(0.7457))["all points"]  # hp written as kW would be 1.341
+    assert explained.verdict is Verdict.QUERY
+    assert "power is in kW under a hp heading" in str(explained.evidence["mistakes"].value)
+    assert judge(power_balance.CHECK, power_only(0.5))["all points"].verdict is Verdict.FAIL
+
+
+def test_an_efficiency_that_follows_and_exceeds_the_ceiling_is_asked_where_units_explain_it():
+    finding = judge(efficiency_ceiling.CHECK, power_only(0.86))["best efficiency"]
+    assert finding.verdict is Verdict.FAIL
+    finding = judge(efficiency_ceiling.CHECK, power_only(0.7457))["best efficiency"]
+    assert finding.verdict is Verdict.QUERY

@@ -40,7 +40,10 @@ def test_the_power_allowed(ratio, verdict):
 def test_trimming_and_the_fit_are_given_to_the_bidder():
     case = regulated(EU, eu_index=0.35)
     given = replace(case, estimates=replace(case.estimates, trim_allowance=0.01))
-    assert judge(regulatory_efficiency.CHECK, given)[EU].verdict is Verdict.PASS
+    finding = judge(regulatory_efficiency.CHECK, given)[EU]
+    assert finding.verdict is Verdict.REMARK
+    assert "trimming" in finding.wording.message
+    assert judge(regulatory_efficiency.CHECK, case)[EU].verdict is Verdict.QUERY
 
 
 def test_regulations_the_inquiry_does_not_name_do_not_apply():

@@ -161,3 +161,12 @@ def test_npsh3_that_is_not_given_is_asked_for():
     assert judge(npsh_form.CHECK, npsh(RISING[:3]))["fall"].verdict is Verdict.NO_DATA
     no_peak = sound_case({"curves": (sound_curve(efficiency=None, power=None),)})
     assert judge(npsh_form.CHECK, no_peak)["fall"].verdict is Verdict.NO_DATA
+
+
+def test_a_specific_speed_no_source_of_efficiency_covers_is_not_judged():
+    case = shaped("part_load", 0.5)
+    assert case.estimates.shape is not None
+    none = tuple(replace(source, value=None, reason="outside") for source in case.estimates.shape.part_load.sources)
+    shape = replace(case.estimates.shape, part_load=ShapeRatio(0.5, none))
+    case = replace(case, estimates=replace(case.estimates, shape=shape))
+    assert judge(efficiency_shape.CHECK, case)["part load"].verdict is Verdict.NOT_APPLICABLE

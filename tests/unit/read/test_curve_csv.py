@@ -164,7 +164,7 @@ def test_ambiguity_is_refused(text, message):
 
 def test_efficiency_just_inside():
     assert read("Q [m3/h];eff [%]\n0;0\n1;100\n")["efficiency"].value[-1] == 1.0
-    assert read("Q [m3/h];eff [%]\n0;0\n1;0\n")["efficiency"].value[-1] == 0.0
+    assert read("Q [m3/h];eff [%]\n0;0\n1;5\n")["efficiency"].value[0] == 0.0
 
 
 def test_all_problems_at_once():
@@ -197,3 +197,10 @@ def test_a_point_that_may_divide_thousands_is_refused(tmp_path, rows, refused):
         (curve,) = read_curve_file(path, speed_rpm=1480.0)
         assert curve.head is not None
         assert len(curve.head) == 3
+
+
+@pytest.mark.parametrize("column", ["head [m]", "npsh3 [m]", "power [kW]"])
+def test_a_column_that_is_nowhere_above_zero_is_refused(column):
+    (problem,) = problems(f"flow [m3/h], {column}\n0, 0\n100, 0\n200, 0\n")
+    assert problem.startswith("curve.csv:2: ")
+    assert "is nowhere above zero; leave the column blank where it is not given" in problem
