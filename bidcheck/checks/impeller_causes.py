@@ -9,6 +9,7 @@ from bidcheck.estimates.head_coefficient import HIGHEST_NQ, LOWEST_NQ, head_coef
 from bidcheck.explain import CONVERTED, UNIT_MISTAKES, Quantity, possible
 from bidcheck.hydraulics.driver import synchronous_speed
 from bidcheck.hydraulics.specific_speed import specific_speed
+from bidcheck.limits import within
 
 CLOSE = 0.12
 """How near to the expected head coefficient a mistake must bring the offered one. Source: common practice, no source;
@@ -42,11 +43,11 @@ class Figures:
 def likely_causes(case: Case) -> tuple[str, ...]:
     """Words of every single mistake that brings the head coefficient near what is expected, the nearest first.
 
-    Empty where the bid states no diameter or nothing would do. Flow and head in other units are looked at only where
+    Empty where the bid states no diameter, the coefficient is plausible as it stands, or nothing would do. Flow and head in other units are looked at only where
     the curve misses the duty: a curve that meets it is in the units it says.
     """
     figures = figures_of(case)
-    if figures is None:
+    if figures is None or within(figures.ratio(), case.inquiry.limits.head_coefficient).holds:
         return ()
     found: list[tuple[float, str]] = []
     kinds = [_units(figures, case), _other_speeds(figures, case), _other_stages(figures, case)]

@@ -163,6 +163,13 @@ def test_a_claim_above_the_ceiling_that_a_mistake_explains_is_asked_not_failed()
     assert "about 1480 1/min" in str(finding.evidence["causes"].value)
 
 
+def test_a_sound_impeller_explains_no_claim_above_the_ceiling():
+    case = multistage(6)
+    assert likely_causes(case) == ()
+    lifted = replace(case, estimates=replace(case.estimates, offered_efficiency=0.97, offered_interval=0.003))
+    assert judge(efficiency_ceiling.CHECK, lifted)["best efficiency"].verdict is Verdict.FAIL
+
+
 @pytest.mark.parametrize(
     ("diameter", "material", "verdict", "words"),
     [
