@@ -17,10 +17,12 @@ half the scatter of honest impellers and a little."""
 MOST_NAMED = 3
 """More would explain nothing."""
 MOST_STAGES = 16
+"""Stages looked at. Source: common practice, no source; offers with more are rare."""
 ABOUT = (0.75, 1.4)
 """Head offered over head asked for within which a curve is taken to be in the units it says. Source: common practice,
 no source."""
 INCH = 25.4
+"""Millimetres. Source: definition of the inch."""
 
 
 @dataclass(frozen=True, slots=True)
@@ -43,8 +45,9 @@ class Figures:
 def likely_causes(case: Case) -> tuple[str, ...]:
     """Words of every single mistake that brings the head coefficient near what is expected, the nearest first.
 
-    Empty where the bid states no diameter, the coefficient is plausible as it stands, or nothing would do. Flow and head in other units are looked at only where
-    the curve misses the duty: a curve that meets it is in the units it says.
+    Empty where the bid states no diameter, the coefficient is plausible as it stands, or nothing would do. Flow and
+    head in other units are looked at only where the curve misses the duty: a curve that meets it is in the units it
+    says.
     """
     figures = figures_of(case)
     if figures is None or within(figures.ratio(), case.inquiry.limits.head_coefficient).holds:

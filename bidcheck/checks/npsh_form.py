@@ -22,6 +22,7 @@ from bidcheck.limits import within
 FROM = 0.6
 """Share of best efficiency flow from which NPSH3 must not fall. Source: common practice, no source."""
 LEAST_POINTS = 3
+"""Points above that share needed to speak of a fall. Source: common practice, no source."""
 
 
 def run(case: Case) -> Iterator[Measured]:
