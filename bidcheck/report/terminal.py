@@ -1,5 +1,7 @@
 """The evaluation on a terminal: one table of bidders against what matters, then what stands against each bid."""
 
+from collections.abc import Sequence
+
 from rich.console import Console
 from rich.table import Table
 from rich.text import Text
@@ -131,8 +133,13 @@ def _print_bid(bid: BidEvaluation, console: Console, system: UnitSystem) -> None
     head.append(f"  {_outcome(bid)}", style=STYLES[bid.outcome])
     console.print(head)
     asked: set[str] = set()
-    for finding in against(bid.findings):
-        _print_finding(finding, console, system, asked)
+    findings = against(bid.findings)
+    wanting = _wanting(findings, system)
+    for finding in findings:
+        others = wanting.get(message(finding, system), [finding.check])
+        if finding.verdict is not Verdict.NO_DATA or others[0] == finding.check:
+            also = [name for name in others if name != finding.check]
+            _print_finding(finding, console, system, asked, also=also)
     counts = counted(bid.findings)
     rest = f"  {counts[Verdict.PASS]} passed"
     if counts[Verdict.NOT_APPLICABLE]:
@@ -140,12 +147,27 @@ def _print_bid(bid: BidEvaluation, console: Console, system: UnitSystem) -> None
     console.print(Text(rest, style="dim"))
 
 
-def _print_finding(finding: Finding, console: Console, system: UnitSystem, asked: set[str]) -> None:
+def _wanting(findings: Sequence[Finding], system: UnitSystem) -> dict[str, list[str]]:
+    """Checks that could not be made for want of the same thing, each once, by what is said of it."""
+    found: dict[str, list[str]] = {}
+    for finding in findings:
+        if finding.verdict is Verdict.NO_DATA:
+            names = found.setdefault(message(finding, system), [])
+            if finding.check not in names:
+                names.append(finding.check)
+    return found
+
+
+def _print_finding(
+    finding: Finding, console: Console, system: UnitSystem, asked: set[str], *, also: Sequence[str] = ()
+) -> None:
     """Verdict and check at the left, the words beside them, wrapped without trailing blanks."""
     lead = Text("  ")
     lead.append(f"{VERDICT_WORDS[finding.verdict]:<8}", style=STYLES[finding.verdict])
     lead.append(f"{finding.check:<{CHECK_WIDTH}}")
     words = _said(finding, system, asked)
+    if also and finding.verdict is Verdict.NO_DATA:
+        words.append(f"\nfor want of it not checked either: {', '.join(also)}")
     words.plain = tied(words.plain).translate(HIDE)
     for number, line in enumerate(words.wrap(console, max(console.width - len(lead), 30))):
         line.rstrip()

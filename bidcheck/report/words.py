@@ -1,5 +1,6 @@
 """Verdicts, outcomes, limits and findings in words."""
 
+import re
 from collections.abc import Mapping
 
 from bidcheck.evaluation import Outcome
@@ -70,6 +71,10 @@ def limit_in_words(limit: Limit, system: UnitSystem) -> str:
     return f"at least {low}" if high is None else f"at most {high}"
 
 
+_ONE_FIGURE = re.compile(r"(?<![\w.])(\d[\d.]*(?: (?:%|m|ft|mm|in))?) to \1(?=[\s,;:.)]|$)")
+"""A range whose ends print alike, which is one figure."""
+
+
 class _Filled(dict[str, str]):
     """Evidence as text; a name a template uses and the finding lacks is a mistake of ours."""
 
@@ -82,7 +87,7 @@ def _fill(template: str, finding: Finding, system: UnitSystem) -> str:
     values["subject"] = finding.subject
     if finding.limit is not None:
         values["limit"] = limit_in_words(finding.limit, system)
-    return template.format_map(values)
+    return _ONE_FIGURE.sub(r"\1", template.format_map(values))
 
 
 def message(finding: Finding, system: UnitSystem) -> str:

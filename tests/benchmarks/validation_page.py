@@ -57,6 +57,7 @@ def page(found: Found) -> str:
         "## Published figures\n",
         table(["figure", "published", "computed", "source"], list(published_rows())),
         _duties(),
+        _pumps(),
         "## The sources against one another\n",
         _against(),
         "## Honest and overstated pumps\n",
@@ -204,6 +205,29 @@ def _duties() -> str:
 The ceiling of duty d is 94.4 where disc friction is referred to the flow of one eye; an impeller has two outer sides
 whatever its eyes, so the program refers it to total flow.
 """
+
+
+PUMPS = (
+    ("example curve of the Hydraulic Institute data library, four poles at 60 Hz assumed", 900.0, 155.0, 1770.0, 78.0),
+    ("laboratory pump of 9 in, Munson, Young and Okiishi (from memory)", 110.0, 74.0, 1750.0, 61.0),
+)
+"""Published pumps, end suction: US gpm, ft, rpm, best efficiency in per cent."""
+
+
+def _pumps() -> str:
+    rows = []
+    for name, gpm, feet, speed, published in PUMPS:
+        flow, head = gpm * M3S_PER_GPM, feet * 0.3048
+        nq = specific_speed(speed, flow, head)
+        found = estimate_efficiency(
+            arrangement="end suction", nq=nq, nq_eye=nq, flow=flow, head_per_stage=head, speed_rpm=speed
+        )
+        assert found.expected is not None
+        assert found.attainable is not None
+        words = f"{gpm:g} US gpm, {feet:g} ft, nq {nq:.0f}"
+        rows.append([name, words, f"{published:g}", f"{100 * found.expected:.1f}", f"{100 * found.attainable:.1f}"])
+    head_row = ["published pump", "best efficiency point", "published", "expected", "attainable"]
+    return f"Pumps with a published best efficiency, in per cent:\n\n{table(head_row, rows)}"
 
 
 def _grid() -> Iterator[tuple[float, float]]:

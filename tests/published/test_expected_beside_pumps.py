@@ -2,12 +2,16 @@
 
 import math
 
+import numpy as np
 import pytest
 
+from bidcheck.curve import Curve, Points
 from bidcheck.estimates.attainable import chart_efficiency
 from bidcheck.estimates.efficiency import estimate_efficiency
+from bidcheck.estimates.impeller import estimate_impeller
 from bidcheck.estimates.market_surface import ESOB_1450, market_median
 from bidcheck.estimates.shape import Shape, balance_of
+from bidcheck.fit import fit_curve
 from bidcheck.hydraulics.specific_speed import specific_speed
 
 M3H = 1 / 3600
@@ -56,3 +60,32 @@ def test_balance_of_losses_beside_the_chart():
     assert min(distance.values()) == pytest.approx(-1.4, abs=0.1)
     assert max(distance.values()) == pytest.approx(8.2, abs=0.1)
     assert max(distance, key=distance.__getitem__) == (n - 1, 0)
+
+
+# source: from memory: Munson, Young and Okiishi, Fundamentals of Fluid Mechanics, test of a 9 in impeller at 1750 rpm:
+# source: 20 to 140 US gpm, 40.2 to 25.8 psi, 1.58 to 4.00 hp
+def test_a_laboratory_pump_of_a_textbook_is_plausible():
+    flow = np.array([20.0, 40.0, 60.0, 80.0, 100.0, 120.0, 140.0]) * 231 * 0.0254**3 / 60
+    head = np.array([40.2, 40.1, 38.1, 36.2, 33.5, 30.1, 25.8]) * 6894.757 / (998.2 * 9.80665)
+    power = np.array([1.58, 2.27, 2.67, 2.95, 3.19, 3.49, 4.00]) * 745.7
+    half, line = np.full(7, 1e-6), np.arange(2, 9)
+    points = [Points(flow.copy(), values, half.copy(), half.copy(), line.copy()) for values in (head, power)]
+    curve = Curve("curve.csv", 9 * 0.0254, 1750.0, 1, "water", 998.2, "shaft", points[0], None, points[1], None)
+    best = fit_curve(curve).bep
+    assert best is not None
+    assert best.efficiency == pytest.approx(0.61, abs=0.015)
+    nq = specific_speed(1750.0, best.flow, best.head)
+    estimate = estimate_efficiency(
+        arrangement="end suction",
+        nq=nq,
+        nq_eye=nq,
+        flow=best.flow,
+        head_per_stage=best.head,
+        speed_rpm=1750.0,
+        diameter=9 * 0.0254,
+    )
+    assert estimate.remark_below < best.efficiency < estimate.remark_above
+    impeller = estimate_impeller(
+        nq_eye=nq, flow_per_eye=best.flow, head_per_stage=best.head, speed_rpm=1750.0, diameter=9 * 0.0254
+    )
+    assert 0.8 < impeller.ratio < 1.2

@@ -104,3 +104,22 @@ def test_queries_of_a_check_always_ask():
     for check in ALL:
         asks = any(wording.question for wording in check.wordings.values())
         assert check.otherwise is not Verdict.QUERY or asks
+
+
+@pytest.mark.parametrize(
+    ("low", "high", "words"),
+    [(1.361, 1.362, "1.36 is expected"), (1.36, 1.37, "1.36 to 1.37 is expected"), (1.3, 11.3, "1.30 to 11.3 is")],
+)
+def test_a_range_whose_ends_print_alike_is_one_figure(low, high, words):
+    evidence = {"low": Evidence(low, Kind.RATIO), "high": Evidence(high, Kind.RATIO)}
+    finding = Finding(
+        check="curve-shape",
+        group="curve form",
+        subject="shutoff head",
+        verdict=Verdict.PASS,
+        wording=Wording("{low} to {high} is expected."),
+        evidence=evidence,
+        limit=None,
+        source="",
+    )
+    assert message(finding, UnitSystem.SI).startswith(words)
