@@ -45,10 +45,10 @@ CHECK = Check(
             " the test or operating data behind it.",
         ),
         "no inducer": Wording(
-            "Suction specific speed is {nss} without an inducer ({basis}): NPSH3 is hard to believe, or the eye very"
-            " large.",
-            "Your NPSH3 puts suction specific speed at {nss} without an inducer. Please send the NPSH test of this"
-            " pump, and state the minimum continuous stable flow.",
+            "Suction specific speed is {nss} without an inducer ({basis}): a very large eye, which runs rough at part"
+            " flow.",
+            "Your NPSH3 puts suction specific speed at {nss} without an inducer. Please state the minimum continuous"
+            " stable flow with the test or operating data behind it.",
         ),
     },
 )

@@ -15,6 +15,7 @@ THREE_DIGITS = (Kind.FLOW, Kind.POWER)
 
 _UNITS = {printed.unit for kind in KINDS.values() for printed in (kind.si, kind.us)} - {""}
 _BEFORE_UNIT = re.compile(rf"(?<=\d) (?=(?:{'|'.join(map(re.escape, sorted(_UNITS, reverse=True)))})(?!\w))")
+_THOUSANDS = re.compile(r"(?<=\b\d) (?=\d{3}\b)|(?<=\b\d{2}) (?=\d{3}\b)")
 MANY_TIMES = 10.0
 """A ratio from which it is printed as so many times, not in per cent."""
 
@@ -117,11 +118,12 @@ def plain(text: str) -> str:
 
 
 def tied(text: str) -> str:
-    r"""Text in which no line breaks between a figure and its unit.
+    r"""Text in which no line breaks inside a figure or between it and its unit.
 
     Examples
     --------
-    >>> tied("at 520 m³/h for 3 more")
-    'at 520\xa0m³/h for 3 more'
+    >>> tied("at 520 m³/h for 3 more"), tied("7 000 to 11 000")
+    ('at 520\xa0m³/h for 3 more', '7\u202f000 to 11\u202f000')
     """
-    return _BEFORE_UNIT.sub("\u00a0", text).replace("US gpm", "US\u00a0gpm")
+    whole = _THOUSANDS.sub(NARROW_SPACE, text)
+    return _BEFORE_UNIT.sub("\u00a0", whole).replace("US gpm", "US\u00a0gpm")

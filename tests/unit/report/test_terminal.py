@@ -5,12 +5,13 @@ import pytest
 from rich.console import Console
 
 import bidcheck
+from bidcheck.bid import Claims
 from bidcheck.errors import Problem
 from bidcheck.evaluation import Evaluation
 from bidcheck.inquiry import UnreadableBid
 from bidcheck.quantity import UnitSystem
 from bidcheck.report.terminal import print_evaluation
-from tests.build import EXAMPLES
+from tests.build import EXAMPLES, inquiry, sound_bid, sound_curve
 
 
 def printed(evaluation: Evaluation, width: int = 120, system: UnitSystem = UnitSystem.SI) -> str:
@@ -65,3 +66,10 @@ def test_no_line_breaks_between_a_figure_and_its_unit(evaluation):
         findings = printed(evaluation, width).split("50 passed", 1)[1]
         for line in findings.splitlines():
             assert line.split()[:1] not in (["m"], ["m."], ["%"], ["%."], ["m³/h"], ["kW"])
+
+
+def test_checks_wanting_the_same_thing_are_told_together():
+    bare = sound_bid(curves=(sound_curve(npsh3=None),), claims=Claims())
+    text = printed(bidcheck.evaluate(inquiry(bids=(bare,))), 140)
+    assert text.count("the bid gives no NPSH3 at best efficiency") == 1
+    assert "for want of it not checked either: npsh-form, suction-specific-speed" in text
