@@ -10,6 +10,7 @@ from bidcheck.errors import Problem
 from bidcheck.evaluation import Evaluation, Outcome
 from bidcheck.inquiry import UnreadableBid
 from bidcheck.quantity import UnitSystem
+from bidcheck.report.format import tied
 from bidcheck.report.page import evaluation_page
 from bidcheck.report.words import CAUTION, OUTCOME_WORDS, against, message, question
 from tests.build import EXAMPLES, inquiry, sound_bid, sound_curve
@@ -143,7 +144,7 @@ def test_us_units_leave_no_metric_flow_head_or_power(evaluation):
 def test_limits_and_inputs_all_stand_on_the_page(evaluation, system, page):
     text = words_of(page)
     for limit in evaluation.inquiry.limits.all():
-        assert limit.origin in text
+        assert tied(limit.origin).replace("\u00a0", " ") in text
     for item in evaluation.inquiry.inputs:
         assert item.file in text
         assert item.sha256 in text
