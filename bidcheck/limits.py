@@ -92,6 +92,10 @@ class Limits:
     efficiency_peers: Limit = named(
         Kind.POINTS, "best efficiency over what is expected of it, against the middle of the other bids"
     )
+    trim_gain: Limit = named(
+        Kind.POINTS,
+        "best efficiency at the rated diameter over that at the largest diameter, which trimming does not raise",
+    )
     efficiency_shape: Limit = named(
         Kind.POINTS, "efficiency at 75 and 110 % of best efficiency flow over the best, beyond what is expected"
     )

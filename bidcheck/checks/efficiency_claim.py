@@ -3,7 +3,8 @@
 The efficiency of the bidder's curve at best efficiency is held against estimates that do not come from the bidder:
 the middle of the surveyed market of its class, and what a published chart calls practically attainable. A claim
 above the attainable asks for a test; one far above it is called implausible. A low claim is poor for its class or
-stated on another basis; what trimming may have cost is given to the bidder there, and where losses of motor or
+stated on another basis. The curve of the largest diameter given is judged, and that of the rated diameter must not be
+better than it. On the low side what trimming may have cost is given to the bidder, and where losses of motor or
 frequency converter would explain it, that is said before anything else. A curve brought to water from a viscous liquid
 is never more than a remark. No such estimate can show an overstatement of 3 points, and 5 seldom; 8 mostly and 10
 nearly always for end suction and double suction pumps at four poles or slower, less often for in-line, small and faster
@@ -14,18 +15,14 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import points, share, specific_speed, text
+from bidcheck.checks.motor_losses import losses_that_explain
 from bidcheck.checks.request import asked, not_applicable
+from bidcheck.curve import BestEfficiency, Fits
 from bidcheck.explain import in_words
 from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
-from bidcheck.hydraulics.driver import motor_efficiency
 from bidcheck.limits import Limit, Mark, within
 from bidcheck.quantity import Kind
 from bidcheck.second_opinion import EfficiencyEstimate
-
-CONVERTER = 0.97
-"""Efficiency of a frequency converter near full load. Source: common practice, no source."""
-SMALLEST_MOTOR, LARGEST_MOTOR = 750.0, 200e3
-"""Range of the standard for motor efficiency [W]; its ends serve beyond. Source: IEC 60034-30-1."""
 
 CHART = "Hydraulic Institute chart of attainable efficiency, clean cold water"
 
@@ -54,6 +51,29 @@ def run(case: Case) -> Iterator[Measured]:
         yield _placed(case, estimate, claim)
     if case.estimates.corrected:
         yield asked("water curve", "water curve")
+    yield _trimmed(case)
+
+
+def _trimmed(case: Case) -> Measured:
+    """Best efficiency at the rated diameter against that at the largest, which trimming does not raise."""
+    rated = case.fits.bep if case.fits is not None else None
+    largest = case.max_fits.bep if case.max_fits is not None else None
+    if case.fits is case.max_fits or rated is None or largest is None:
+        return not_applicable("rated diameter", "there are no best efficiencies of two diameters to compare")
+    gain = rated.efficiency - largest.efficiency
+    doubt = sum(_width(fits, bep) for fits, bep in ((case.fits, rated), (case.max_fits, largest)))
+    evidence = {"rated": share(rated.efficiency), "largest": share(largest.efficiency), "gain": points(gain)}
+    compared = within(gain, case.inquiry.limits.trim_gain, slack=doubt)
+    wording = "trimmed" if compared.holds else "trimmed above"
+    return Measured(subject="rated diameter", holds=compared, evidence=evidence, wording=wording)
+
+
+def _width(fits: Fits | None, bep: BestEfficiency) -> float:
+    """Half the 95 % interval of the best efficiency of one curve; nothing where it cannot be told."""
+    if fits is None or fits.efficiency is None:
+        return 0.0
+    width = fits.efficiency.half_width(bep.flow)
+    return width if width < float("inf") else 0.0
 
 
 def _limit(name: str, at_least: float | None, at_most: float | None, origin: str, mark: Mark) -> Limit:
@@ -137,42 +157,6 @@ def _below(estimate: EfficiencyEstimate, claim: float, allowance: float) -> tupl
     return None
 
 
-def losses_that_explain(case: Case, estimate: EfficiencyEstimate, claim: float) -> tuple[str, ...]:
-    """Losses of other machines that would put a low claim into the ordinary band, were they counted in it.
-
-    Without a stated motor efficiency that of an IE3 motor of the offered rating is taken.
-    """
-    motor, drive = case.bid.driver, case.bid.drive
-    eta, words = motor.efficiency, "the efficiency of the motor offered"
-    if eta is None:
-        eta, words = _ordinary_motor(case), "the efficiency of an ordinary motor of this size"
-    low, high = estimate.remark_below, estimate.remark_above
-    if eta is None or low is None or high is None:
-        return ()
-    allowance = case.estimates.trim_allowance
-    kinds = [(eta, f"efficiency is that of pump and motor together ({words}, {100 * eta:.1f} %)")]
-    if drive == "variable":
-        both = f"efficiency is wire to water, motor and converter included ({words} and 97 %)"
-        kinds.append((eta * CONVERTER, both))
-    return tuple(said for share_kept, said in kinds if low - allowance <= claim / share_kept <= high)
-
-
-def _ordinary_motor(case: Case) -> float | None:
-    """Efficiency of an IE3 motor for the power at rated flow; None outside the standard."""
-    rating = case.bid.driver.rating or (case.at_duty.power or 0.0) * 1.1
-    if rating <= 0:
-        return None
-    return motor_efficiency(min(max(rating, SMALLEST_MOTOR), LARGEST_MOTOR), _poles(case))
-
-
-def _poles(case: Case) -> int:
-    """Poles of the driver, as stated or as speed has them, within those the standard covers."""
-    stated = case.bid.driver.poles
-    if stated in (2, 4, 6):
-        return stated
-    return min((2, 4, 6), key=lambda poles: abs(case.bid.speed_rpm - 6600.0 / poles))
-
-
 def _evidence(case: Case, estimate: EfficiencyEstimate, claim: float) -> dict[str, Evidence]:
     """The whole picture: claim, expected, attainable, distance, place in the market, specific speed."""
     found: dict[str, Evidence] = {"claim": share(claim)}
@@ -198,12 +182,23 @@ CHECK = Check(
     group="efficiency",
     run=run,
     otherwise=Verdict.QUERY,
+    limits=("trim_gain",),
     source=(
         "Regulation (EU) 547/2012 market surface; Gülich, Centrifugal Pumps, Table 3.9; Hydraulic Institute chart of"
         " attainable efficiency"
     ),
     wordings={
         "": Wording("Best efficiency {claim} is plausible: {distance} {side} the expected {expected}."),
+        "trimmed": Wording(
+            "Best efficiency {rated} at the rated diameter agrees with {largest} at the largest: trimming does not"
+            " raise it."
+        ),
+        "trimmed above": Wording(
+            "Best efficiency {rated} at the rated diameter is {gain} above the {largest} of the largest diameter, where"
+            " trimming lowers it.",
+            "Your curve of the rated diameter peaks at {rated}, that of the largest at {largest}. Trimming does not"
+            " raise efficiency: please say which holds, and send the test behind it.",
+        ),
         "no expected value": Wording(
             "Best efficiency {claim} stays below what the published chart calls attainable; for this arrangement and"
             " size there is no expected value, so a low claim is not judged."

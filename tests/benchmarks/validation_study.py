@@ -48,7 +48,8 @@ def judge(pump: Pump, points: float) -> tuple[Verdict, bool]:
     """Gravest verdict of the efficiency checks on the pump overstated so far, and whether it is called very low."""
     inquiry = overstated(pump, points)
     order = list(Verdict)
-    found = run_checks(prepare(inquiry, inquiry.bids[0]), CHECKS)
+    everything = run_checks(prepare(inquiry, inquiry.bids[0]), CHECKS)
+    found = [finding for finding in everything if finding.verdict is not Verdict.NOT_APPLICABLE] or list(everything)
     low = any(
         finding.verdict is Verdict.QUERY and finding.limit is not None and finding.limit.name == "efficiency_very_low"
         for finding in found

@@ -180,3 +180,19 @@ def test_outside_the_limits_of_the_correction_nothing_is_judged():
     case = viscous(0.9, viscosity=4e-3)
     assert case.estimates.nq is None
     assert judge(efficiency_claim.CHECK, case)["best efficiency"].verdict is Verdict.NO_DATA
+
+
+@pytest.mark.parametrize(("gain", "verdict"), [(-2.0, Verdict.PASS), (0.9, Verdict.PASS), (2.5, Verdict.QUERY)])
+def test_a_trimmed_impeller_is_not_better_than_the_full_one(gain, verdict):
+    full = sound_curve(impeller=0.430, power=None)
+    trimmed = sound_curve(power=None)
+    assert trimmed.efficiency is not None
+    lifted = replace(trimmed.efficiency, value=trimmed.efficiency.value * (1 + gain / 82.5))
+    case = sound_case({"curves": (replace(trimmed, efficiency=lifted), full)})
+    finding = judge(efficiency_claim.CHECK, case)["rated diameter"]
+    assert finding.verdict is verdict
+    assert (finding.wording.question != "") is (verdict is Verdict.QUERY)
+
+
+def test_one_diameter_alone_is_not_compared():
+    assert judge(efficiency_claim.CHECK, sound_case())["rated diameter"].verdict is Verdict.NOT_APPLICABLE

@@ -1,4 +1,5 @@
 import io
+import re
 from dataclasses import replace
 
 import pytest
@@ -35,7 +36,7 @@ def test_fits_the_width_and_trails_no_blanks(evaluation, width):
 
 def test_every_bid_has_its_outcome_and_alder_nothing_against_it(evaluation):
     text = printed(evaluation)
-    assert "alder a  acceptable\n  50 passed" in text
+    assert re.search(r"alder a  acceptable\n  \d+ passed", text)
     for words in ("birch a  acceptable after queries", "dogwood a  not acceptable", "limit:", "ask:"):
         assert words in text
 
@@ -63,7 +64,7 @@ def test_bids_left_out_are_named_and_text_cannot_colour(evaluation):
 
 def test_no_line_breaks_between_a_figure_and_its_unit(evaluation):
     for width in range(80, 140, 7):
-        findings = printed(evaluation, width).split("50 passed", 1)[1]
+        findings = printed(evaluation, width).split("alder a  acceptable\n", 1)[1]
         for line in findings.splitlines():
             assert line.split()[:1] not in (["m"], ["m."], ["%"], ["%."], ["m³/h"], ["kW"])
 
