@@ -70,7 +70,7 @@ def test_exactly_the_planted_trouble(folder, expected):
 def test_birch_is_called_implausible_not_impossible():
     evaluation = bidcheck.evaluate(bidcheck.read_inquiry(EXAMPLES / "cooling_water"))
     (birch,) = (bid for bid in evaluation.bids if bid.case.bid.bidder == "birch")
-    (claim,) = (finding for finding in birch.findings if finding.check == "efficiency-claim")
+    (claim,) = (f for f in birch.findings if (f.check, f.subject) == ("efficiency-claim", "best efficiency"))
     assert "implausible" in claim.wording.message
 
 

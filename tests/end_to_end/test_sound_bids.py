@@ -111,7 +111,7 @@ def test_losses_of_motor_and_converter_are_named_where_efficiency_is_low(drive, 
             bid, drive=drive, driver=driver, claims=replace(bid.claims, bep_efficiency=None), curves=(lowered,)
         )
         (judged,) = bidcheck.evaluate(replace(inquiry, bids=(bid,))).bids
-        (claim,) = (f for f in judged.findings if f.check == "efficiency-claim")
+        (claim,) = (f for f in judged.findings if (f.check, f.subject) == ("efficiency-claim", "best efficiency"))
         if claim.verdict in (Verdict.REMARK, Verdict.QUERY):
             low += 1
             assert words in str(claim.evidence["causes"].value)
