@@ -5,6 +5,7 @@ from typing import NamedTuple
 
 from bidcheck.basis import viscosity_matters
 from bidcheck.bid import Bid
+from bidcheck.case import AtFlow
 from bidcheck.curve import Curve, Fit, Fits
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates.curve_shape import (
@@ -26,7 +27,7 @@ from bidcheck.hydraulics.power_balance import shaft_power
 from bidcheck.hydraulics.specific_speed import specific_speed, suction_specific_speed
 from bidcheck.hydraulics.viscous import water_point
 from bidcheck.inquiry import Liquid
-from bidcheck.second_opinion import Estimates, RegulationEstimate, ShapeEstimate
+from bidcheck.second_opinion import Estimates, RegulationEstimate, ShapeEstimate, SuctionEstimate
 
 SAME_DIAMETER = 0.002
 """Two diameters within 0.2 % are one. Source: common practice, no source; printed diameters are rounded to 1 mm."""
@@ -40,17 +41,41 @@ TEST_DENSITY = 998.2
 """Density of clean cold water, for shaft power in the scope of a regulation. [kg/m³] Source: water at 20 °C."""
 
 
+NEAR = (0.85, 1.15)
+"""Rated flow over best efficiency flow within which NPSH3 at rated flow may stand for that at best efficiency.
+Source: common practice, no source."""
+CLAIM_DOUBT = 0.005
+"""Doubt of an efficiency that is claimed without a curve, beside its printed digits. Source: common practice, no
+source."""
+
+
 class Best(NamedTuple):
-    """Best efficiency point with water, head of one stage; half the 95 % interval of its efficiency."""
+    """Best efficiency point with water, head of one stage; half the 95 % interval of its efficiency.
+
+    `words` say where it comes from if not from the points; `low_side` is False where a claim at rated flow stands in,
+    which may be below the best.
+    """
 
     flow: float
     head: float
     efficiency: float
     interval: float | None
-    corrected: bool
+    corrected: bool = False
+    words: str = ""
+    low_side: bool = True
 
 
-def appraise(bid: Bid, curve: Curve | None, fits: Fits | None, liquid: Liquid) -> tuple[Estimates, str]:
+class Npsh3(NamedTuple):
+    """NPSH3 with the flow it belongs to, and where it is taken from. [m, m³/s]"""
+
+    value: float
+    flow: float
+    words: str
+
+
+def appraise(
+    bid: Bid, curve: Curve | None, fits: Fits | None, liquid: Liquid, *, rated: Fits | None, at_duty: AtFlow
+) -> tuple[Estimates, str]:
     """Estimates for the best efficiency point of a curve, and why there are none.
 
     Parameters
@@ -60,6 +85,10 @@ def appraise(bid: Bid, curve: Curve | None, fits: Fits | None, liquid: Liquid) -
         Of the largest diameter given, at the offered speed and stages.
     liquid : Liquid
         Of the inquiry.
+    rated : Fits or None
+        Of the rated diameter.
+    at_duty : AtFlow
+        What the pump does at rated flow, claims included.
 
     Returns
     -------
@@ -68,20 +97,24 @@ def appraise(bid: Bid, curve: Curve | None, fits: Fits | None, liquid: Liquid) -
 
     Notes
     -----
-    A curve given as pumped in a viscous liquid is brought back to water by ANSI/HI 9.6.7 inside its limits.
+    A curve given as pumped in a viscous liquid is brought back to water by ANSI/HI 9.6.7 inside its limits. Where the
+    points show no best efficiency, the one declared or, failing that, the claim at rated flow is placed.
     Source: see the modules of `bidcheck.estimates`
     """
+    best, why = _best(bid, curve, fits, liquid)
+    if best is None and not why:
+        best = _declared(bid, fits, at_duty)
     if curve is None or fits is None:
         why = "the bid gives no curve of the offered diameter"
-        return _nothing(why), why
-    best, why = _best(bid, curve, fits, liquid)
     if best is None:
         return _nothing(why or "the points show no best efficiency point"), why
-    return _estimates(bid, curve, fits, best), why
+    return _estimates(bid, curve, fits, best, _npsh3(best, fits, rated, at_duty)), why
 
 
-def _best(bid: Bid, curve: Curve, fits: Fits, liquid: Liquid) -> tuple[Best | None, str]:
-    """Best efficiency point with water; why it cannot be told."""
+def _best(bid: Bid, curve: Curve | None, fits: Fits | None, liquid: Liquid) -> tuple[Best | None, str]:
+    """Best efficiency point of the points, with water; why it cannot be told for want of a water curve."""
+    if curve is None or fits is None:
+        return None, ""
     bep = fits.bep
     viscous = curve.liquid == "as pumped" and viscosity_matters(liquid, bid, fits)
     wanted = "the curve is given as pumped, for a viscous liquid; a water curve is needed" if viscous else ""
@@ -89,13 +122,45 @@ def _best(bid: Bid, curve: Curve, fits: Fits, liquid: Liquid) -> tuple[Best | No
         return None, wanted
     interval = fits.efficiency.half_width(bep.flow) if fits.efficiency is not None else None
     if not viscous:
-        return Best(bep.flow, bep.head / bid.stages, bep.efficiency, interval, corrected=False), ""
+        return Best(bep.flow, bep.head / bid.stages, bep.efficiency, interval), ""
     try:
         point = water_point(liquid.viscosity, bep.flow, bep.head / bid.stages, bep.efficiency, bid.speed_rpm)
     except OutOfRange:
         return None, wanted
     wider = None if interval is None else interval / point.factors.efficiency
-    return Best(point.flow, point.head_per_stage, point.efficiency, wider, corrected=True), wanted
+    words = "brought from the viscous liquid to water"
+    return Best(point.flow, point.head_per_stage, point.efficiency, wider, corrected=True, words=words), wanted
+
+
+def _declared(bid: Bid, fits: Fits | None, at_duty: AtFlow) -> Best | None:
+    """Best efficiency as the bidder declares it, else the claim at rated flow in its place; None without either."""
+    flow, efficiency = bid.claims.bep_flow, bid.claims.bep_efficiency
+    head = _value(fits.head, flow.value) if fits is not None and flow is not None else None
+    if flow is not None and efficiency is not None and head is not None and head > 0:
+        doubt = efficiency.half_digit + CLAIM_DOUBT
+        words = "best efficiency as declared, the points show none"
+        return Best(flow.value, head / bid.stages, efficiency.value, doubt, words=words)
+    claim = bid.claims.efficiency
+    if claim is None or at_duty.head is None or at_duty.head <= 0:
+        return None
+    words = "claim at rated flow, taken as best efficiency for want of a curve"
+    doubt = claim.half_digit + CLAIM_DOUBT
+    return Best(at_duty.flow, at_duty.head / bid.stages, claim.value, doubt, words=words, low_side=False)
+
+
+def _npsh3(best: Best, fits: Fits | None, rated: Fits | None, at_duty: AtFlow) -> Npsh3 | None:
+    """NPSH3 at best efficiency: of the largest diameter, of the rated one, or at rated flow where that is near."""
+    if best.corrected:
+        return None
+    for one, words in ((fits, ""), (rated, "NPSH3 of the rated diameter")):
+        flow = best.flow if one is fits else (one.bep.flow if one is not None and one.bep is not None else None)
+        value = _value(one.npsh3, flow) if one is not None and flow is not None else None
+        if value is not None and value > 0 and flow is not None:
+            return Npsh3(value, flow, words)
+    over = at_duty.flow_over_bep if at_duty.flow_over_bep is not None else at_duty.flow / best.flow
+    if at_duty.npsh3 is not None and at_duty.npsh3 > 0 and NEAR[0] <= over <= NEAR[1]:
+        return Npsh3(at_duty.npsh3, at_duty.flow, "NPSH3 at rated flow")
+    return None
 
 
 def _nothing(why: str) -> Estimates:
@@ -104,7 +169,11 @@ def _nothing(why: str) -> Estimates:
         nq=None,
         nq_eye=None,
         nss=None,
+        nss_basis="",
         basis=why,
+        best_flow=None,
+        best_head=None,
+        declared=False,
         efficiency=None,
         offered_efficiency=None,
         offered_interval=None,
@@ -117,19 +186,24 @@ def _nothing(why: str) -> Estimates:
     )
 
 
-def _estimates(bid: Bid, curve: Curve, fits: Fits, best: Best) -> Estimates:
+def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, best: Best, npsh3: Npsh3 | None) -> Estimates:
     """Everything the sources say of one best efficiency point."""
-    eye_flow = best.flow / bid.suction_eyes
+    eyes, diameter = bid.suction_eyes, curve.impeller if curve is not None else bid.impeller_rated
     nq = specific_speed(bid.speed_rpm, best.flow, best.head)
-    nq_eye = specific_speed(bid.speed_rpm, eye_flow, best.head)
-    npsh3 = None if best.corrected else _value(fits.npsh3, best.flow)
-    shutoff = None if best.corrected else _value(fits.head, 0.0)
-    shape = None if best.corrected else _shape(nq_eye, fits, best.flow)
+    nq_eye = specific_speed(bid.speed_rpm, best.flow / eyes, best.head)
+    of_points = fits if not best.words else None
+    shutoff = _value(of_points.head, 0.0) if of_points is not None else None
+    shape = _shape(nq_eye, of_points, best.flow) if of_points is not None else None
+    basis = ", ".join(words for words in (_basis(bid, curve), best.words) if words)
     return Estimates(
         nq=nq,
         nq_eye=nq_eye,
-        nss=suction_specific_speed(bid.speed_rpm, eye_flow, npsh3) if npsh3 is not None and npsh3 > 0 else None,
-        basis=_basis(bid, curve) + (", brought from the viscous liquid to water" if best.corrected else ""),
+        nss=None if npsh3 is None else suction_specific_speed(bid.speed_rpm, npsh3.flow / eyes, npsh3.value),
+        nss_basis="" if npsh3 is None else (npsh3.words or basis),
+        basis=basis,
+        best_flow=best.flow,
+        best_head=best.head,
+        declared=bool(best.words) and not best.corrected,
         efficiency=estimate_efficiency(
             arrangement=bid.arrangement,
             nq=nq,
@@ -138,30 +212,36 @@ def _estimates(bid: Bid, curve: Curve, fits: Fits, best: Best) -> Estimates:
             head_per_stage=best.head,
             speed_rpm=bid.speed_rpm,
             stages=bid.stages,
-            suction_eyes=bid.suction_eyes,
-            diameter=curve.impeller,
+            suction_eyes=eyes,
+            diameter=diameter,
         ),
         offered_efficiency=best.efficiency,
         offered_interval=best.interval,
-        trim_allowance=_trim_allowance(bid, curve),
+        trim_allowance=_trim_allowance(bid, curve) if best.low_side else 1.0,
         corrected=best.corrected,
         impeller=estimate_impeller(
             nq_eye=nq_eye,
-            flow_per_eye=eye_flow,
+            flow_per_eye=best.flow / eyes,
             head_per_stage=best.head,
             speed_rpm=bid.speed_rpm,
-            diameter=curve.impeller,
+            diameter=diameter,
             shutoff_head_per_stage=None if shutoff is None else shutoff / bid.stages,
         ),
         shape=shape,
-        suction=estimate_suction(
-            bid.speed_rpm,
-            eye_flow,
-            offered=npsh3,
-            growth=_growth(fits.npsh3, best.flow),
-            inducer=bid.inducer,
-        ),
-        regulation=_regulation(bid, nq_eye, best, shape, fits.head),
+        suction=_suction(bid, of_points, best, npsh3),
+        regulation=_regulation(bid, nq_eye, best, shape, of_points.head if of_points is not None else None),
+    )
+
+
+def _suction(bid: Bid, fits: Fits | None, best: Best, npsh3: Npsh3 | None) -> SuctionEstimate:
+    """NPSH3 offered beside that of an ordinary eye, at the flow where it is offered."""
+    flow = npsh3.flow if npsh3 is not None else best.flow
+    return estimate_suction(
+        bid.speed_rpm,
+        flow / bid.suction_eyes,
+        offered=npsh3.value if npsh3 is not None else None,
+        growth=_growth(fits.npsh3, best.flow) if fits is not None else None,
+        inducer=bid.inducer,
     )
 
 
@@ -194,8 +274,10 @@ def _growth(npsh3: Fit | None, best_flow: float) -> float | None:
     return log(end / start) / log(npsh3.domain[1] / best_flow) if start > 0 and end > 0 else None
 
 
-def _basis(bid: Bid, curve: Curve) -> str:
-    """Say in words which curve specific speed is taken from."""
+def _basis(bid: Bid, curve: Curve | None) -> str:
+    """Say in words which curve specific speed is taken from; empty without a curve."""
+    if curve is None:
+        return ""
     if curve.impeller is None:
         return "the one curve of the bid, diameter not named"
     if bid.impeller_max is not None and curve.impeller >= bid.impeller_max * (1.0 - SAME_DIAMETER):
@@ -205,9 +287,9 @@ def _basis(bid: Bid, curve: Curve) -> str:
     return "curve of the largest diameter given"
 
 
-def _trim_allowance(bid: Bid, curve: Curve) -> float:
+def _trim_allowance(bid: Bid, curve: Curve | None) -> float:
     """What trimming may have cost the efficiency of a curve below the maximum diameter [fraction]."""
-    if curve.impeller is None or bid.impeller_max is None or curve.impeller >= bid.impeller_max:
+    if curve is None or curve.impeller is None or bid.impeller_max is None or curve.impeller >= bid.impeller_max:
         return 0.0
     cost = TRIM_COST_DIFFUSER if bid.casing_type == "diffuser" else TRIM_COST_VOLUTE
     return cost * (1.0 - curve.impeller / bid.impeller_max)

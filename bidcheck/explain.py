@@ -27,6 +27,8 @@ class Mistake:
     quantity: Quantity
     factor: float
     words: str
+    slack: float = 0.0
+    """Doubt of the factor itself, relative, beside what counts as close."""
     heading: float = 0.0
     """One unit of the heading it happens under, in SI; 0 where it may happen under any."""
 
@@ -82,7 +84,7 @@ def _unit_mistakes() -> Iterator[Mistake]:
             for meant, written in ((one, other), (other, one)):
                 article, heading = units[written]
                 words = f"{quantity} is in {meant} under {article} {written} heading"
-                yield Mistake(quantity, heading / units[meant][1], words, heading)
+                yield Mistake(quantity, heading / units[meant][1], words, heading=heading)
 
 
 UNIT_MISTAKES: tuple[Mistake, ...] = tuple(_unit_mistakes())
@@ -180,27 +182,49 @@ def frequency_mistakes() -> tuple[Mistake, ...]:
     return tuple(found)
 
 
-def density_mistakes(density: float) -> tuple[Mistake, ...]:
-    """Power stated for water where the liquid is meant, and the other way round."""
+def density_mistakes(density: float, *, of_water: bool) -> tuple[Mistake, ...]:
+    """Power stated for water where the liquid is meant, or for the liquid where the curve is one for water.
+
+    Parameters
+    ----------
+    density : float
+        Of the liquid pumped. [kg/m³]
+    of_water : bool
+        Whether the figures are meant for water.
+    """
     if abs(density / 1000.0 - 1.0) < CLOSE:
         return ()
-    return (
-        *_both_ways(
-            "power",
-            1000.0 / density,
-            "density is left out of power",
-            "power is for the liquid pumped, the rest for water",
-        ),
-    )
+    if of_water:
+        return (Mistake("power", density / 1000.0, "power is for the liquid pumped, the rest for water"),)
+    return (Mistake("power", 1000.0 / density, "density is left out of power"),)
 
 
-def motor_mistakes(motor_efficiency: float | None) -> tuple[Mistake, ...]:
-    """Motor input stated in place of shaft power; only with the efficiency of the motor offered."""
-    if motor_efficiency is None:
+MOTOR_PART_LOAD = 0.025
+"""How far power at the shaft, taken at a motor's full-load efficiency, may be off at the loads of a curve. Source:
+common practice, no source."""
+STATED_SPREAD, ORDINARY_SPREAD = 0.005, 0.015
+"""How far a motor near its load may be from the efficiency stated, and an ordinary one from the standard's, beside what
+counts as close. Source: common practice, no source."""
+
+
+def motor_mistakes(motor_efficiency: float | None, ordinary: float | None = None) -> tuple[Mistake, ...]:
+    """Motor input stated in place of shaft power, or an efficiency with the motor in it.
+
+    Parameters
+    ----------
+    motor_efficiency : float or None
+        Of the motor offered, as stated. [fraction]
+    ordinary : float or None
+        Of an ordinary motor of that size, where none is stated. [fraction]
+    """
+    eta = motor_efficiency if motor_efficiency is not None else ordinary
+    if eta is None:
         return ()
+    slack = STATED_SPREAD if motor_efficiency is not None else ORDINARY_SPREAD
+    tail = "" if motor_efficiency is not None else f" (an ordinary motor of this size has {100 * eta:.0f} %)"
     return (
-        Mistake("power", 1.0 / motor_efficiency, "power is motor input, not shaft power"),
-        Mistake("efficiency", motor_efficiency, "efficiency is that of pump and motor together"),
+        Mistake("power", 1.0 / eta, f"power is motor input, not shaft power{tail}", slack),
+        Mistake("efficiency", eta, f"efficiency is that of pump and motor together{tail}", slack),
     )
 
 
@@ -236,7 +260,7 @@ def mistakes_that_close(gap: float, exponents: dict[Quantity, int], mistakes: It
         if exponent is None:
             continue
         distance = abs(gap / mistake.factor**exponent - 1.0)
-        if distance <= CLOSE:
+        if distance <= CLOSE + mistake.slack:
             close.append((distance, mistake.words))
     return tuple(words for _, words in sorted(close))
 

@@ -39,7 +39,8 @@ def prepare(inquiry: Inquiry, bid: Bid) -> Case:
     fits = fit_curve(curve, check_flow=flow) if curve else None
     max_fits = fit_curve(max_curve) if max_curve and max_curve is not curve else fits
     pumped = as_pumped(curve, fits, inquiry.liquid, bid, assumptions) if curve and fits else None
-    estimates, water = appraise(bid, max_curve, max_fits, inquiry.liquid)
+    at_duty = _with_claims(_at_flow(pumped, flow, npsh_available_at(inquiry, flow)), bid)
+    estimates, water = appraise(bid, max_curve, max_fits, inquiry.liquid, rated=fits, at_duty=at_duty)
     return Case(
         inquiry=inquiry,
         bid=bid,
@@ -49,7 +50,7 @@ def prepare(inquiry: Inquiry, bid: Bid) -> Case:
         max_curve=max_curve,
         max_fits=max_fits,
         estimates=estimates,
-        at_duty=_with_claims(_at_flow(pumped, flow, npsh_available_at(inquiry, flow)), bid),
+        at_duty=at_duty,
         operating=_operating(inquiry, bid, pumped),
         water=water,
         assumptions=(*bid.assumptions, *assumptions),

@@ -165,7 +165,15 @@ class Estimates:
     nq: float | None
     nq_eye: float | None
     nss: float | None
+    nss_basis: str
+    """Which NPSH3 the suction specific speed is taken from, in words; empty where there is none."""
     basis: str
+    best_flow: float | None
+    """Best efficiency flow with water that everything here belongs to [m³/s]."""
+    best_head: float | None
+    """Head of one stage there [m]."""
+    declared: bool
+    """Whether best efficiency is the bidder's word, because the points show none."""
     efficiency: EfficiencyEstimate | None
     offered_efficiency: float | None
     """Efficiency at best efficiency point of the bidder's own curve on the same basis (maximum diameter)."""

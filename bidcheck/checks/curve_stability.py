@@ -59,7 +59,7 @@ def _fit_droop(fit: Fit) -> tuple[float, float]:
     lo, hi = fit.domain
     turns = fit.polynomial.deriv().roots()
     real = np.real(turns[np.abs(np.imag(turns)) < 1e-12])
-    candidates = [lo, *(float(q) for q in real if lo < q < hi)]
+    candidates = [lo, *(float(q) for q in real if lo < q < hi), hi]
     peak = max(candidates, key=lambda q: float(fit.polynomial(q)))
     shutoff = float(fit.polynomial(lo))
     return peak, max(float(fit.polynomial(peak)) / shutoff - 1.0, 0.0)

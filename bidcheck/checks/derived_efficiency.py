@@ -44,4 +44,6 @@ def _candidates(case: Case) -> Iterator[Mistake]:
     yield from possible(UNIT_MISTAKES, headings_of(case.max_curve))
     yield from stage_mistakes(case.bid.stages)
     yield from pump_mistakes(case.inquiry.duty.pumps_running)
-    yield from density_mistakes(case.inquiry.liquid.density)
+    yield from density_mistakes(
+        case.inquiry.liquid.density, of_water=case.max_curve is None or case.max_curve.liquid == "water"
+    )

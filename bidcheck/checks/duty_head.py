@@ -1,16 +1,25 @@
 """The pump makes the head asked for at rated flow.
 
 Everything else is idle if the duty is not met. The head of the bidder's own curve at rated flow, as pumped and at the
-offered diameter, is compared with the rated head; the doubt of fit and printed digits is given to the bidder.
+offered diameter, is compared with the rated head; the doubt of fit and printed digits is given to the bidder. A head
+so low that it must be on another basis, per stage or in another unit, is asked about instead.
 """
 
 from collections.abc import Iterator
 
 from bidcheck.case import Case
-from bidcheck.checks.evidence import flow, head, share
+from bidcheck.checks.evidence import flow, head, share, text
 from bidcheck.checks.request import asked
+from bidcheck.explain import UNIT_MISTAKES, in_words, possible, stage_mistakes
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import within
+
+OTHER_BASIS = 0.6
+"""Share of the rated head below which a head that a unit or the stages explain is on another basis, not short.
+Source: common practice, no source."""
+MEANT = (0.95, 1.15)
+"""Head over rated head, once on the right basis, of a bid that was meant for the duty. Source: common practice, no
+source."""
 
 
 def run(case: Case) -> Iterator[Measured]:
@@ -27,17 +36,40 @@ def run(case: Case) -> Iterator[Measured]:
     ratio = at.head / duty.rated_head
     floor = within(ratio, limits.duty_head_floor, slack=doubt / duty.rated_head)
     asked_for = within(ratio, limits.duty_head, slack=doubt / duty.rated_head)
+    evidence = {
+        "head": head(at.head),
+        "rated_head": head(duty.rated_head),
+        "rated_flow": flow(duty.rated_flow),
+        "ratio": share(ratio),
+    }
+    causes = () if floor.holds or ratio > OTHER_BASIS else _other_bases(case, ratio)
+    if causes:
+        evidence["causes"] = text(in_words(causes))
+        yield Measured(
+            subject="rated",
+            verdict=Verdict.QUERY,
+            limit=floor.limit,
+            evidence=evidence,
+            wording="explained",
+        )
+        return
     yield Measured(
         subject="rated",
         holds=asked_for if floor.holds else floor,
-        evidence={
-            "head": head(at.head),
-            "rated_head": head(duty.rated_head),
-            "rated_flow": flow(duty.rated_flow),
-            "ratio": share(ratio),
-        },
+        evidence=evidence,
         wording="claimed" if "head" in at.from_claims else "",
     )
+
+
+def _other_bases(case: Case, ratio: float) -> tuple[str, ...]:
+    """Mistakes in stating head without which it would be about the rated head."""
+    points = case.curve.head if case.curve is not None else None
+    mistakes = (
+        *possible(UNIT_MISTAKES, {"head": points.value_unit if points is not None else 0.0}),
+        *stage_mistakes(case.bid.stages),
+    )
+    heads = (mistake for mistake in mistakes if mistake.quantity == "head")
+    return tuple(one.words for one in heads if MEANT[0] <= ratio / one.factor <= MEANT[1])
 
 
 CHECK = Check(
@@ -52,6 +84,12 @@ CHECK = Check(
             "Head at rated flow {rated_flow} is {head}, {ratio} of the rated head {rated_head}.",
             "Your curve gives {head} at {rated_flow}; {rated_head} are asked for. Please offer a diameter that meets"
             " the duty.",
+        ),
+        "explained": Wording(
+            "Head at rated flow {rated_flow} is {head}, {ratio} of the rated head {rated_head}. It would be explained"
+            " if {causes}.",
+            "Your curve gives {head} at {rated_flow}; {rated_head} are asked for. It looks as if {causes}. Please"
+            " confirm and correct.",
         ),
         "claimed": Wording(
             "Head at rated flow {rated_flow} is claimed as {head}, {ratio} of the rated head {rated_head}; the curve"

@@ -4,11 +4,16 @@ The efficiency of the bidder's curve at best efficiency is held against estimate
 the middle of the surveyed market of its class, and what a published chart calls practically attainable. A claim
 above the attainable asks for a test; one far above it is called implausible. A low claim is poor for its class or
 stated on another basis. The curve of the largest diameter given is judged, and that of the rated diameter must not be
-better than it. On the low side what trimming may have cost is given to the bidder, and where losses of motor or
-frequency converter would explain it, that is said before anything else. A curve brought to water from a viscous liquid
-is never more than a remark. No such estimate can show an overstatement of 3 points, and 5 seldom; 8 mostly and 10
-nearly always for end suction and double suction pumps at four poles or slower, less often for in-line, small and faster
-ones. docs/validation.md has the figures.
+better than it.
+
+On the low side what trimming may have cost is given to the bidder, and where losses of motor or frequency converter
+would explain it, that is said before anything else. Where the points show no best efficiency, the one declared is
+placed, or the claim at rated flow on the high side, and the curve is asked for. A curve brought to water from a viscous
+liquid is never more than a remark.
+
+No such estimate can show an overstatement of 3 points, and 5 seldom; 8 mostly and 10 nearly always for end suction and
+double suction pumps at four poles or slower, less often for in-line, small and faster ones. docs/validation.md has the
+figures.
 """
 
 from collections.abc import Iterator
@@ -51,6 +56,8 @@ def run(case: Case) -> Iterator[Measured]:
         yield _placed(case, estimate, claim)
     if case.estimates.corrected:
         yield asked("water curve", "water curve")
+    if case.estimates.declared:
+        yield asked("efficiency curve", "best efficiency")
     yield _trimmed(case)
 
 
@@ -90,6 +97,8 @@ def _placed(case: Case, estimate: EfficiencyEstimate, claim: float) -> Measured:
     if low is not None and (causes := losses_that_explain(case, estimate, claim)):
         evidence["causes"] = text(in_words(causes))
         wording = f"{wording}, explained"
+    if wording == "above attainable" and "market_below" not in evidence and estimate.expected is not None:
+        wording = "above attainable, not surveyed"
     if estimate.expected is None:
         wording = f"{wording}, no expected value".removeprefix(", ")
     if case.estimates.corrected and verdict is Verdict.QUERY:
@@ -208,8 +217,11 @@ CHECK = Check(
             f"Best efficiency {{claim}} is implausible: {BEYOND}.", CERTIFIED_TEST
         ),
         "above attainable": Wording(
-            f"Best efficiency {{claim}} is {BEYOND}; {MIDDLE}. About the top tenth of the surveyed market is there.",
+            f"Best efficiency {{claim}} is {BEYOND}; {MIDDLE}. Of the surveyed market {{market_below}} lies below it.",
             TEST_CERTIFICATE,
+        ),
+        "above attainable, not surveyed": Wording(
+            f"Best efficiency {{claim}} is {BEYOND}; {MIDDLE}.", TEST_CERTIFICATE
         ),
         "above attainable, no expected value": Wording(f"Best efficiency {{claim}} is {BEYOND}.", TEST_CERTIFICATE),
         "high": Wording(f"Best efficiency {{claim}} is high for this size and specific speed: {MIDDLE}."),

@@ -39,7 +39,7 @@ def distance(case: Case) -> float | None:
     """Best efficiency offered less the expected one [fraction]; None where either is missing."""
     estimates = case.estimates
     estimate, claim = estimates.efficiency, estimates.offered_efficiency
-    if estimate is None or estimate.expected is None or claim is None or estimates.corrected:
+    if estimate is None or estimate.expected is None or claim is None or estimates.corrected or estimates.declared:
         return None
     return claim - estimate.expected
 

@@ -62,11 +62,11 @@ def likely_causes(case: Case) -> tuple[str, ...]:
 
 def figures_of(case: Case) -> Figures | None:
     """Figures of the curve that the estimates were taken from; None where one is missing."""
-    best, impeller = case.max_fits.bep if case.max_fits is not None else None, case.estimates.impeller
-    if best is None or best.head is None or best.head <= 0 or impeller is None or impeller.diameter is None:
+    estimates, bid = case.estimates, case.bid
+    flow, head, impeller = estimates.best_flow, estimates.best_head, estimates.impeller
+    if flow is None or head is None or impeller is None or impeller.diameter is None:
         return None
-    bid = case.bid
-    return Figures(best.flow / bid.suction_eyes, best.head, bid.speed_rpm, impeller.diameter, bid.stages)
+    return Figures(flow / bid.suction_eyes, head * bid.stages, bid.speed_rpm, impeller.diameter, bid.stages)
 
 
 def _units(figures: Figures, case: Case) -> Iterator[tuple[str, Figures]]:

@@ -6,6 +6,7 @@ rest is asked for without holding the bid up. What is missing is never taken as 
 
 from collections.abc import Iterator
 
+from bidcheck.bid import Bid
 from bidcheck.case import Case
 from bidcheck.checks.request import Item, asked, asked_for_curve
 from bidcheck.finding import Check, Measured, Verdict, Wording
@@ -26,10 +27,18 @@ def run(case: Case) -> Iterator[Measured]:
     if any(curve.power_at == "motor input" for curve in bid.curves):
         yield from _need("motor efficiency", "motor efficiency", bid.driver.efficiency is not None)
     yield from _need("minimum flow", "minimum continuous flow", bid.claims.min_continuous_flow is not None)
-    diameters = bid.impeller_rated is not None and bid.impeller_max is not None
-    yield from _need("impeller diameters", "impeller diameters", diameters)
+    yield from _diameters(bid)
     yield from _need("guarantee", "guarantee", bid.guarantee.standard is not None or bid.guarantee.grade is not None)
     yield from _need("casing rating", "casing rating", bid.casing.max_pressure is not None)
+
+
+def _diameters(bid: Bid) -> Iterator[Measured]:
+    """Rated and maximum diameter, asked for as they are missing."""
+    rated, largest = bid.impeller_rated is not None, bid.impeller_max is not None
+    request: Item = "impeller diameters" if not rated and not largest else "rated impeller diameter"
+    if rated:
+        request = "maximum impeller diameter"
+    yield from _need("impeller diameters", request, rated and largest)
 
 
 def _need(subject: str, request: Item, given: bool, *, decisive: bool = False) -> Iterator[Measured]:

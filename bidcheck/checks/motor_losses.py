@@ -18,7 +18,7 @@ def losses_that_explain(case: Case, estimate: EfficiencyEstimate, claim: float) 
     motor, drive = case.bid.driver, case.bid.drive
     eta, words = motor.efficiency, "the efficiency of the motor offered"
     if eta is None:
-        eta, words = _ordinary_motor(case), "the efficiency of an ordinary motor of this size"
+        eta, words = ordinary_motor(case), "the efficiency of an ordinary motor of this size"
     low, high = estimate.remark_below, estimate.remark_above
     if eta is None or low is None or high is None:
         return ()
@@ -30,7 +30,7 @@ def losses_that_explain(case: Case, estimate: EfficiencyEstimate, claim: float) 
     return tuple(said for share_kept, said in kinds if low - allowance <= claim / share_kept <= high)
 
 
-def _ordinary_motor(case: Case) -> float | None:
+def ordinary_motor(case: Case) -> float | None:
     """Efficiency of an IE3 motor for the power at rated flow; None outside the standard."""
     rating = case.bid.driver.rating or (case.at_duty.power or 0.0) * 1.1
     if rating <= 0:

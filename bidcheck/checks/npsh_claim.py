@@ -8,31 +8,18 @@ wise to buy is another check.
 """
 
 from collections.abc import Iterator
-from typing import NamedTuple
 
 from bidcheck.case import Case
-from bidcheck.checks.evidence import flow, npsh, suction_specific_speed, text
+from bidcheck.checks.evidence import npsh, suction_specific_speed, text
 from bidcheck.checks.request import Item, asked, not_applicable
 from bidcheck.checks.unlike import at_most_remark
 from bidcheck.checks.verdicts import missed
-from bidcheck.estimates.npsh3_expected import HIGHEST_NSS, LOWEST_NSS, expected_npsh3
-from bidcheck.explain import CONVERTED, FEET, FOOT, SAME_UNIT
+from bidcheck.estimates.npsh3_expected import HIGHEST_NSS, LOWEST_NSS
+from bidcheck.explain import FEET, FOOT, SAME_UNIT
 from bidcheck.finding import Check, Measured, Verdict, Wording
-from bidcheck.hydraulics.specific_speed import suction_specific_speed as nss_of
 from bidcheck.limits import within
 from bidcheck.quantity import unit_of
-
-NEAR = (0.85, 1.15)
-"""Rated flow over best efficiency flow within which NPSH3 at rated flow may stand for that at best efficiency.
-Source: common practice, no source."""
-
-
-class _Claimed(NamedTuple):
-    """NPSH3 [m], the flow it belongs to [m³/s], and where that is."""
-
-    npsh3: float
-    flow: float
-    where: str
+from bidcheck.second_opinion import SuctionEstimate
 
 
 def run(case: Case) -> Iterator[Measured]:
@@ -40,42 +27,29 @@ def run(case: Case) -> Iterator[Measured]:
     if case.bid.inducer:
         yield not_applicable("best efficiency", "an inducer is offered, and the ordinary band is for impellers without")
         return
-    claimed = _claimed(case)
-    if claimed is None:
+    estimates = case.estimates
+    suction, nss = estimates.suction, estimates.nss
+    if suction is None or suction.offered is None or nss is None:
         missing: Item = "water curve" if case.water and case.curve is not None else "NPSH3 at best efficiency"
         yield asked("best efficiency", missing)
         return
-    yield _placed(case, claimed)
+    yield _placed(case, suction, suction.offered, nss)
 
 
-def _claimed(case: Case) -> _Claimed | None:
-    """NPSH3 at best efficiency by the curve, else at rated flow where that is near."""
-    suction, best = case.estimates.suction, case.max_fits.bep if case.max_fits is not None else None
-    if suction is not None and suction.offered is not None and suction.offered > 0 and best is not None:
-        return _Claimed(suction.offered, best.flow, "at best efficiency")
-    at = case.at_duty
-    near = at.flow_over_bep is not None and NEAR[0] <= at.flow_over_bep <= NEAR[1]
-    if near and at.npsh3 is not None and at.npsh3 > 0:
-        return _Claimed(at.npsh3, at.flow, "at rated flow")
-    return None
-
-
-def _placed(case: Case, claimed: _Claimed) -> Measured:
+def _placed(case: Case, suction: SuctionEstimate, offered: float, nss: float) -> Measured:
     """The claim against the credible range, and units that would explain it."""
-    limits, eye_flow = case.inquiry.limits, claimed.flow / case.bid.suction_eyes
-    nss = nss_of(case.bid.speed_rpm, eye_flow, claimed.npsh3)
-    expected = expected_npsh3(case.bid.speed_rpm, eye_flow)
+    limits, at_rated = case.inquiry.limits, case.estimates.nss_basis == "NPSH3 at rated flow"
     evidence = {
-        "npsh3": npsh(claimed.npsh3),
-        "flow": flow(claimed.flow),
-        "where": text(claimed.where),
+        "npsh3": npsh(offered),
+        "where": text("at rated flow" if at_rated else "at best efficiency"),
         "nss": suction_specific_speed(nss),
-        "ordinary_from": npsh(expected.low),
-        "ordinary_to": npsh(expected.high),
+        "ordinary_from": npsh(suction.low),
+        "ordinary_to": npsh(suction.high),
     }
     high, low = within(nss, limits.nss_credible), within(nss, limits.nss_sound)
     if high.holds and low.holds:
-        return Measured(subject="best efficiency", holds=high, evidence=evidence)
+        band = LOWEST_NSS <= nss <= HIGHEST_NSS
+        return Measured(subject="best efficiency", holds=high, evidence=evidence, wording="" if band else "between")
     limit, wording = (limits.nss_credible, "low") if not high.holds else (limits.nss_sound, "high")
     cause = _units(nss, _heading(case), too_low=not high.holds)
     verdict = missed(limit, Verdict.QUERY)
@@ -105,8 +79,9 @@ def _units(nss: float, heading: float, *, too_low: bool) -> str:
     meant = nss / factor if too_low else nss * factor
     if not LOWEST_NSS <= meant <= HIGHEST_NSS:
         return ""
-    words = "NPSH3 is in m under a ft heading" if too_low else "NPSH3 is in ft under an m heading"
-    return words if not heading or abs(heading / under - 1.0) <= SAME_UNIT else f"{words}, {CONVERTED}"
+    if heading and abs(heading / under - 1.0) > SAME_UNIT:
+        return ""
+    return "NPSH3 is in m under a ft heading" if too_low else "NPSH3 is in ft under an m heading"
 
 
 CHECK = Check(
@@ -118,23 +93,27 @@ CHECK = Check(
     source="common practice, no source: ordinary suction specific speeds",
     wordings={
         "": Wording(
-            "NPSH3 {npsh3} {where}, {flow}, is what ordinary impellers show ({ordinary_from} to {ordinary_to}; suction"
+            "NPSH3 {npsh3} {where}, is what ordinary impellers show ({ordinary_from} to {ordinary_to}; suction"
             " specific speed {nss})."
         ),
+        "between": Wording(
+            "NPSH3 {npsh3} {where} is outside what ordinary impellers show, {ordinary_from} to {ordinary_to}, and not"
+            " beyond belief (suction specific speed {nss})."
+        ),
         "low": Wording(
-            "NPSH3 {npsh3} {where}, {flow}, is hard to believe without an inducer: ordinary impellers need"
+            "NPSH3 {npsh3} {where}, is hard to believe without an inducer: ordinary impellers need"
             " {ordinary_from} to {ordinary_to}. It implies a suction specific speed of {nss}.",
-            "You state NPSH3 {npsh3} {where}, {flow}; ordinary impellers of this speed and flow need {ordinary_from} to"
+            "You state NPSH3 {npsh3} {where}; ordinary impellers of this speed and flow need {ordinary_from} to"
             " {ordinary_to}. Please send the NPSH test of this hydraulic, at 3 % head drop, with cold water.",
         ),
         "high": Wording(
-            "NPSH3 {npsh3} {where}, {flow}, is poor for this speed and flow, or wrong: ordinary impellers need"
+            "NPSH3 {npsh3} {where}, is poor for this speed and flow, or wrong: ordinary impellers need"
             " {ordinary_from} to {ordinary_to} (suction specific speed {nss})."
         ),
         "explained": Wording(
-            "NPSH3 {npsh3} {where}, {flow}, lies outside what ordinary impellers show, {ordinary_from} to"
+            "NPSH3 {npsh3} {where}, lies outside what ordinary impellers show, {ordinary_from} to"
             " {ordinary_to}. One mistake would explain it: {cause}.",
-            "You state NPSH3 {npsh3} {where}, {flow}, where {ordinary_from} to {ordinary_to} is ordinary. It looks as"
+            "You state NPSH3 {npsh3} {where}, where {ordinary_from} to {ordinary_to} is ordinary. It looks as"
             " if {cause}. Please confirm and correct.",
         ),
     },

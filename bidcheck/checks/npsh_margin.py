@@ -2,7 +2,8 @@
 
 At NPSH3 the pump already loses 3 % of its head to cavitation. The margin is wanted as a ratio and as a difference,
 the stricter of the two, and a larger one where suction specific speed is high. NPSH3 rises and NPSH available falls
-with flow, so a pump that is safe at rated flow can cavitate at the largest.
+with flow, so a pump that is safe at rated flow can cavitate at the largest. Where suction specific speed is not known
+and only the ordinary margin is kept, the NPSH3 curve is asked for.
 """
 
 from collections.abc import Iterator
@@ -70,9 +71,19 @@ def _margin(case: Case, subject: str, at: AtFlow, npsh3: float, npsha: float) ->
     floor = within(npsha - npsh3, limits.npsh_floor)
     if not floor.holds:
         return Measured(subject=subject, holds=floor, evidence=evidence, wording="none left")
-    return Measured(
-        subject=subject, holds=compare(margins(limits, is_raised(case, at)), npsh3, npsha), evidence=evidence
-    )
+    compared = compare(margins(limits, is_raised(case, at)), npsh3, npsha)
+    if compared.holds and case.estimates.nss is None and not _raised_anyway(case, at, npsh3, npsha):
+        return asked(subject, "NPSH3 at best efficiency")
+    return Measured(subject=subject, holds=compared, evidence=evidence)
+
+
+def _raised_anyway(case: Case, at: AtFlow, npsh3: float, npsha: float) -> bool:
+    """Whether the margin holds even if suction specific speed, which is not known, were high; an excusing region"
+    " counts.
+    """
+    limits, over_bep = case.inquiry.limits, at.flow_over_bep
+    excused = over_bep is not None and within(over_bep, limits.npsh_ordinary_region).holds
+    return excused or compare(margins(limits, raised=True), npsh3, npsha).holds
 
 
 def compare(wanted: tuple[Limit, Limit], npsh3: float, npsha: float) -> Comparison:

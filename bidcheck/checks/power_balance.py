@@ -7,6 +7,7 @@ digits.
 """
 
 from collections.abc import Iterator
+from dataclasses import replace
 
 import numpy as np
 
@@ -14,29 +15,44 @@ from bidcheck.case import Case
 from bidcheck.checks.derived_efficiency import mistakes_behind
 from bidcheck.checks.evidence import flow, share, text
 from bidcheck.checks.headings import headings_of
+from bidcheck.checks.motor_losses import ordinary_motor
 from bidcheck.checks.request import asked, not_applicable
 from bidcheck.checks.verdicts import missed
 from bidcheck.curve import Column, Curve, Floats, Points
 from bidcheck.explain import (
     BALANCE,
+    MOTOR_PART_LOAD,
+    Quantity,
     closing,
     density_mistakes,
     frequency_mistakes,
     in_words,
+    mistakes_that_close,
     motor_mistakes,
     pump_mistakes,
     stage_mistakes,
 )
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.hydraulics.power_balance import efficiency_from_power, printed_digits_tolerance
-from bidcheck.limits import within
+from bidcheck.limits import Limit, within
+from bidcheck.quantity import unit_of
 
 DIGITS_AND = 0.005
 """Added to the tolerance from printed digits. Source: common practice, no source; computed exports agree to 0.2 %."""
 
 
+LOADED = 0.7
+"""Share of rated flow from which a motor is near its load. Source: common practice, no source."""
+
+
 def run(case: Case) -> Iterator[Measured]:
-    """Compare the efficiency that follows from flow, head and power with the one stated."""
+    """Compare the efficiency that follows from flow, head and power with the one stated, on the curve and in claims."""
+    yield from _of_curve(case)
+    yield _claims(case)
+
+
+def _of_curve(case: Case) -> Iterator[Measured]:
+    """The points of the curve."""
     curve = case.curve
     if curve is None or curve.head is None:
         yield asked("all points", "head curve at the offered diameter")
@@ -120,52 +136,77 @@ def _rows(points: Points, lines: list[int]) -> tuple[Floats, Floats, Floats, Flo
 
 
 def _systematic(case: Case, Q: Floats, gap: Floats, tolerance: Floats) -> Measured:
-    """The gap in the middle of all points, and the single mistake that would close it."""
-    limits, bid = case.inquiry.limits, case.bid
-    middle, allowed = float(np.median(gap)), float(np.median(tolerance))
-    off = abs(middle - 1.0)
+    """The gap in the middle of all points."""
     at = int(np.argmin(np.abs(Q - case.inquiry.duty.rated_flow)))
-    evidence = {
-        "followed_over_stated": share(middle),
-        "gap": share(off),
-        "tolerance": share(allowed),
-        "nearest_flow": flow(float(Q[at])),
-    }
+    middle, allowed = float(np.median(gap)), float(np.median(tolerance))
+    if any(curve.power_at == "motor input" for curve in case.bid.curves):
+        allowed += MOTOR_PART_LOAD
+    of_water = case.curve is not None and case.curve.liquid == "water"
+    near = gap[LOADED * case.inquiry.duty.rated_flow <= Q]
+    loaded = float(np.median(near)) if near.size else middle
+    found = _judged(case, middle, allowed, headings_of(case.curve), loaded=loaded, of_water=of_water)
+    return replace(found, evidence={**found.evidence, "nearest_flow": flow(float(Q[at]))})
+
+
+def _claims(case: Case) -> Measured:
+    """Head, efficiency and power claimed at rated flow, where the curve does not give both of the last two."""
+    claims, duty, curve = case.bid.claims, case.inquiry.duty, case.curve
+    if curve is not None and curve.efficiency is not None and curve.power is not None:
+        return not_applicable("claims", "the curve gives efficiency and power itself")
+    head = claims.head.value if claims.head is not None else case.at_duty.head
+    if claims.efficiency is None or claims.power is None or head is None or head <= 0 or not _above_zero(case):
+        return not_applicable("claims", "head, efficiency and power are not all claimed at rated flow")
+    density, half = case.inquiry.liquid.density, claims.head.half_digit if claims.head is not None else 0.0
+    middle = efficiency_from_power(density, duty.rated_flow, head, claims.power.value) / claims.efficiency.value
+    allowed = DIGITS_AND + printed_digits_tolerance(
+        flow=(duty.rated_flow, 0.0),
+        head=(head, half),
+        power=(claims.power.value, claims.power.half_digit),
+        efficiency=(claims.efficiency.value, claims.efficiency.half_digit),
+    )
+    headings: dict[Quantity, float] = {"power": unit_of(claims.power)}
+    found = _judged(case, middle, allowed, headings, loaded=middle, of_water=False)
+    return replace(found, subject="claims", wording=f"claims, {found.wording}".removesuffix(", "))
+
+
+def _above_zero(case: Case) -> bool:
+    """Whether efficiency and power claimed are positive."""
+    claims = case.bid.claims
+    return all(claim is not None and claim.value > 0 for claim in (claims.efficiency, claims.power))
+
+
+def _judged(
+    case: Case, middle: float, allowed: float, headings: dict[Quantity, float], *, loaded: float, of_water: bool
+) -> Measured:
+    """One gap: closed, explained by a single mistake, small, or a contradiction.
+
+    `loaded` is the gap where a motor is near its load, by which motor losses are told.
+    """
+    limits, bid, off = case.inquiry.limits, case.bid, abs(middle - 1.0)
+    evidence = {"followed_over_stated": share(middle), "gap": share(off), "tolerance": share(allowed)}
+
+    def found(verdict: Verdict, limit: Limit, wording: str = "") -> Measured:
+        return Measured(subject="all points", verdict=verdict, limit=limit, evidence=evidence, wording=wording)
+
     if off <= allowed:
-        return Measured(subject="all points", verdict=Verdict.PASS, limit=limits.power_balance, evidence=evidence)
+        return found(Verdict.PASS, limits.power_balance)
+    small = within(off, limits.power_balance, slack=allowed).holds
+    motor = motor_mistakes(bid.driver.efficiency, None if small else ordinary_motor(case))
     others = (
         *stage_mistakes(bid.stages),
         *pump_mistakes(case.inquiry.duty.pumps_running),
         *frequency_mistakes(),
-        *density_mistakes(case.inquiry.liquid.density),
-        *motor_mistakes(bid.driver.efficiency),
+        *density_mistakes(case.inquiry.liquid.density, of_water=of_water),
     )
-    mistakes = closing(middle, BALANCE, others, headings_of(case.curve))
+    mistakes = (*closing(middle, BALANCE, others, headings), *mistakes_that_close(loaded, BALANCE, motor))
     if mistakes:
         evidence["mistakes"] = text(in_words(mistakes))
-        return Measured(
-            subject="all points",
-            verdict=Verdict.QUERY,
-            limit=limits.power_balance,
-            evidence=evidence,
-            wording="explained",
-        )
-    if within(off, limits.power_balance, slack=allowed).holds:
-        small = within(off, limits.power_balance_scatter, slack=allowed).holds
-        return Measured(
-            subject="all points",
-            verdict=Verdict.REMARK if small else missed(limits.power_balance_scatter, Verdict.QUERY),
-            limit=limits.power_balance_scatter,
-            evidence=evidence,
-            wording="off",
-        )
-    return Measured(
-        subject="all points",
-        verdict=Verdict.FAIL,
-        limit=limits.power_balance,
-        evidence=evidence,
-        wording="contradiction",
-    )
+        return found(missed(limits.power_balance, Verdict.QUERY), limits.power_balance, "explained")
+    if small:
+        tiny = within(off, limits.power_balance_scatter, slack=allowed).holds
+        verdict = Verdict.REMARK if tiny else missed(limits.power_balance_scatter, Verdict.QUERY)
+        return found(verdict, limits.power_balance_scatter, "off")
+    return found(missed(limits.power_balance, Verdict.FAIL), limits.power_balance, "contradiction")
 
 
 def _single_points(case: Case, line: Floats, Q: Floats, gap: Floats, tolerance: Floats) -> Iterator[Measured]:
@@ -210,6 +251,29 @@ CHECK = Check(
             "Efficiency that follows from flow, head and power reaches {follows}. It would be explained if {mistakes}.",
             "Your flow, head and shaft power give an efficiency of {follows}. It looks as if {mistakes}. Please confirm"
             " and correct.",
+        ),
+        "claims": Wording(
+            "Efficiency that follows from the head and power claimed at rated flow is {followed_over_stated} of that"
+            " claimed; printed digits leave {tolerance}."
+        ),
+        "claims, off": Wording(
+            "Efficiency that follows from the head and power claimed at rated flow is {followed_over_stated} of that"
+            " claimed; printed digits leave {tolerance}.",
+            "Your claims disagree at rated flow: ρgQH/P comes to {followed_over_stated} of the efficiency claimed."
+            " Please say which figure holds.",
+        ),
+        "claims, explained": Wording(
+            "Efficiency that follows from the head and power claimed at rated flow is {followed_over_stated} of that"
+            " claimed. One mistake would close the gap: {mistakes}.",
+            "Your claims disagree at rated flow: ρgQH/P comes to {followed_over_stated} of the efficiency claimed. It"
+            " looks as if {mistakes}. Please confirm and correct.",
+        ),
+        "claims, contradiction": Wording(
+            "Head, power and efficiency claimed at rated flow contradict one another: the efficiency that follows is"
+            " {followed_over_stated} of that claimed, and no single mistake of units, stages, density or basis explains"
+            " it.",
+            "Your claims contradict one another at rated flow: ρgQH/P comes to {followed_over_stated} of the efficiency"
+            " claimed. Please correct them.",
         ),
         "off": Wording(
             "Efficiency that follows from flow, head and power is {followed_over_stated} of that stated, in the"

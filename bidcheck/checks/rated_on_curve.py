@@ -69,7 +69,13 @@ def _compared(
     mistakes = _mistakes(case, column, gap, unit_of(claim))
     if mistakes:
         evidence["mistakes"] = text(in_words(mistakes))
-        return Measured(subject=subject, verdict=Verdict.QUERY, limit=limit, evidence=evidence, wording="explained")
+        return Measured(
+            subject=subject,
+            verdict=missed(limit, Verdict.QUERY),
+            limit=limit,
+            evidence=evidence,
+            wording="explained",
+        )
     careful = (gap < 1.0) is MORE_IS_BETTER[column]
     return Measured(
         subject=subject,
@@ -109,7 +115,7 @@ def _mistakes(case: Case, column: Column, gap: float, unit: float) -> tuple[str,
         *stage_mistakes(bid.stages),
         *pump_mistakes(case.inquiry.duty.pumps_running),
         *frequency_mistakes(),
-        *density_mistakes(case.inquiry.liquid.density),
+        *density_mistakes(case.inquiry.liquid.density, of_water=False),
         *motor,
     )
     in_curve = mistakes_that_close(1.0 / gap, {column: 1}, motor)
@@ -125,7 +131,7 @@ CHECK = Check(
     limits=("claim_on_curve",),
     source="common practice, no source; tolerance from printed digits and fit",
     wordings={
-        "": Wording("Claimed {quantity} {claim} lies on the bidder's curve ({curve})."),
+        "": Wording("Claimed {quantity} {claim} lies on the bidder's curve ({curve}, off by {gap})."),
         "better": Wording(
             "Claimed {quantity} {claim} is better than the bidder's own curve gives, {curve}: off by {gap}.",
             "You claim {quantity} {claim} where your curve gives {curve}. Which of the two is guaranteed? Please"

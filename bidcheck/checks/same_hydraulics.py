@@ -41,8 +41,9 @@ class Match(NamedTuple):
     """Best efficiency of this bid less that of the other; None where one gives none."""
     alike: bool
     """Whether efficiency and NPSH3 agree wherever both bids give them, and one of them is given."""
-    same_impeller: bool
-    """Whether stated diameters and NPSH3 say it is one impeller, whatever the efficiencies."""
+    same_npsh3: bool
+    same_diameter: bool | None
+    """Whether the ratio of the curves is that of speeds and stated diameters; None where one bid states none."""
 
 
 def run(case: Case) -> Iterator[Measured]:
@@ -56,11 +57,14 @@ def run(case: Case) -> Iterator[Measured]:
     limit = case.inquiry.limits.same_hydraulics
     found = [match for other in case.bids if other.bid is not case.bid and (match := _match(case, other)) is not None]
     matches = [match for match in found if within(match.deviation, limit).holds]
-    yield _judged(case, min(matches, key=lambda match: match.deviation)) if matches else _none(case)
+    judged = [_judged(case, match) for match in sorted(matches, key=lambda match: match.deviation)]
+    order = list(Verdict)
+    yield max(judged, key=lambda one: order.index(one.verdict or Verdict.PASS)) if judged else _none(case)
 
 
-def _none(case: Case) -> Measured:
-    return Measured(subject="other bids", verdict=Verdict.PASS, limit=case.inquiry.limits.same_hydraulics)
+def _none(case: Case, wording: str = "") -> Measured:
+    limit = case.inquiry.limits.same_hydraulics
+    return Measured(subject="other bids", verdict=Verdict.PASS, limit=limit, wording=wording)
 
 
 def _judged(case: Case, match: Match) -> Measured:
@@ -71,12 +75,18 @@ def _judged(case: Case, match: Match) -> Measured:
         evidence["ahead"] = points(match.ahead)
     if match.alike:
         verdict = missed(limits.same_hydraulics, Verdict.REMARK)
-        return _found(verdict, limits.same_hydraulics, evidence, "one pump")
+        wording = "one pump" if match.same_diameter is not False else "one pump, other diameter"
+        return _found(verdict, limits.same_hydraulics, evidence, wording)
     more = limits.same_hydraulics_efficiency
     near = within(2.0 * match.deviation, limits.same_hydraulics).holds
-    if match.same_impeller and near and match.ahead is not None and not within(match.ahead, more).holds:
+    if not (match.same_npsh3 and match.same_diameter and near) or match.ahead is None:
+        return _none(case, "like")
+    if not within(match.ahead, more).holds:
         return _found(missed(more, Verdict.QUERY), more, evidence, "claims more")
-    return _none(case)
+    if not within(-match.ahead, more).holds:
+        evidence["ahead"] = points(-match.ahead)
+        return _found(Verdict.REMARK, more, evidence, "claims less")
+    return _none(case, "like")
 
 
 def _found(verdict: Verdict, limit: Limit, evidence: dict[str, Evidence], wording: str) -> Measured:
@@ -108,15 +118,16 @@ def _match(case: Case, other: Case) -> Match | None:
         deviation,
         peaks[0].efficiency - peaks[1].efficiency if peaks[0] is not None and peaks[1] is not None else None,
         alike=agree and (same_npsh3 or same_efficiency),
-        same_impeller=same_npsh3 and _same_diameter(case, other, ratio),
+        same_npsh3=same_npsh3,
+        same_diameter=_same_diameter(case, other, ratio),
     )
 
 
-def _same_diameter(case: Case, other: Case, ratio: float) -> bool:
-    """Whether both state a diameter, and the ratio of the curves is that of speeds and diameters."""
+def _same_diameter(case: Case, other: Case, ratio: float) -> bool | None:
+    """Whether the ratio of the curves is that of speeds and diameters; None where one bid states no diameter."""
     mine, theirs = case.bid.impeller_rated, other.bid.impeller_rated
     if mine is None or theirs is None:
-        return False
+        return None
     speed = case.bid.speed_rpm / other.bid.speed_rpm
     return abs(ratio / (speed * mine / theirs) - 1.0) <= SAME_DIAMETER
 
@@ -161,6 +172,18 @@ CHECK = Check(
     source="affinity laws; common practice, no source, for how near is one",
     wordings={
         "": Wording("No other bid has the same curves once brought to one speed."),
+        "like": Wording(
+            "Another bid has a like head curve once brought to one speed; efficiency, NPSH3 or diameter tell them"
+            " apart."
+        ),
+        "claims less": Wording(
+            "{other} offers the same head curve once brought to one speed, within {deviation} of head: likely one pump,"
+            " for which it claims {ahead} more efficiency than this bid."
+        ),
+        "one pump, other diameter": Wording(
+            "{other} offers the same curves once brought to one speed, within {deviation} of head, at another impeller"
+            " diameter: likely one pump in two bids, and one of the diameters is wrong."
+        ),
         "one pump": Wording(
             "{other} offers the same curves once brought to one speed, within {deviation} of head: likely one pump in"
             " two bids."

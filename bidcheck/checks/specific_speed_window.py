@@ -17,12 +17,12 @@ from bidcheck.quantity import Kind
 
 def run(case: Case) -> Iterator[Measured]:
     """Compare specific speed at best efficiency with the window of its flow."""
-    nq, bep = case.estimates.nq, case.max_fits.bep if case.max_fits is not None else None
-    if nq is None or bep is None:
+    nq, best_flow = case.estimates.nq, case.estimates.best_flow
+    if nq is None or best_flow is None:
         missing: Item = "water curve" if case.water and case.curve is not None else "best efficiency"
         yield asked("best efficiency", missing)
         return
-    window = specific_speed_window(bep.flow)
+    window = specific_speed_window(best_flow)
     limit = Limit(
         "specific_speed_window",
         Kind.SPECIFIC_SPEED,
@@ -34,7 +34,7 @@ def run(case: Case) -> Iterator[Measured]:
     yield Measured(
         subject="best efficiency",
         holds=within(nq, limit),
-        evidence={"nq": specific_speed(nq), "flow": flow(bep.flow), "basis": text(case.estimates.basis)},
+        evidence={"nq": specific_speed(nq), "flow": flow(best_flow), "basis": text(case.estimates.basis)},
     )
 
 

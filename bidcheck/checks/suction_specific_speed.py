@@ -24,7 +24,7 @@ def run(case: Case) -> Iterator[Measured]:
         return
     high = within(nss, limits.suction_specific_speed_high)
     ordinary = within(nss, limits.suction_specific_speed)
-    evidence = {"nss": suction_specific_speed(nss), "basis": text(case.estimates.basis)}
+    evidence = {"nss": suction_specific_speed(nss), "basis": text(case.estimates.nss_basis)}
     if not high.holds and not case.bid.inducer and not (ordinary.limit.mandatory and not ordinary.holds):
         yield Measured(subject="best efficiency", holds=high, evidence=evidence, wording="no inducer")
     else:

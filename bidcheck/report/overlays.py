@@ -58,10 +58,9 @@ def draw_estimates(axes: "Axes", evaluation: Evaluation, system: UnitSystem) -> 
 def _estimated(evaluation: Evaluation, system: UnitSystem) -> Iterator[_Estimated]:
     """Estimates at best efficiency flow of the largest diameter given, bids without either left out."""
     for index, bid in enumerate(evaluation.bids):
-        estimate, fits = bid.case.estimates.efficiency, bid.case.max_fits
-        bep = fits.bep if fits is not None else None
-        if estimate is not None and bep is not None:
-            yield _Estimated(one(bep.flow, Kind.FLOW, system), estimate, look(index))
+        estimate, flow = bid.case.estimates.efficiency, bid.case.estimates.best_flow
+        if estimate is not None and flow is not None:
+            yield _Estimated(one(flow, Kind.FLOW, system), estimate, look(index))
 
 
 def draw_available(axes: "Axes", evaluation: Evaluation, system: UnitSystem) -> None:

@@ -10,7 +10,7 @@ from bidcheck.curve import Floats
 from bidcheck.errors import OutOfRange
 from bidcheck.estimates.attainable import chart_efficiency
 from bidcheck.estimates.window import specific_speed_window
-from bidcheck.evaluation import BidEvaluation, Evaluation
+from bidcheck.evaluation import Evaluation
 from bidcheck.quantity import Kind, UnitSystem
 from bidcheck.report.drawing import Look, as_svg, label_ends, look, new_figure, one
 from bidcheck.report.format import plain
@@ -67,15 +67,9 @@ def off_the_map(evaluation: Evaluation) -> list[str]:
 def _placed(evaluation: Evaluation) -> Iterator[_Placed]:
     """Bids with a specific speed that the map reaches."""
     for index, bid in enumerate(evaluation.bids):
-        flow, nq = _best_flow(bid), bid.case.estimates.nq
+        flow, nq = bid.case.estimates.best_flow, bid.case.estimates.nq
         if flow is not None and nq is not None and LOWEST <= nq <= HIGHEST:
             yield _Placed(plain(bid.case.bid.name), flow, nq, look(index))
-
-
-def _best_flow(bid: BidEvaluation) -> float | None:
-    """Best efficiency flow of the curve that specific speed is taken from."""
-    fits = bid.case.max_fits
-    return fits.bep.flow if fits is not None and fits.bep is not None else None
 
 
 def _flows(placed: list[_Placed]) -> Floats:

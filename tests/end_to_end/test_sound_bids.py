@@ -54,7 +54,7 @@ def test_large_overstatements_are_asked_about(points, at_least):
     found = [verdicts(overstated(sound_inquiry(rng), points)) for _ in range(90)]
     caught = sum(item["efficiency-claim"] is Verdict.QUERY for item in found)
     assert caught / len(found) >= at_least
-    assert all(item["power-balance"] in (Verdict.PASS, Verdict.REMARK) for item in found)
+    assert all(item["power-balance"] not in (Verdict.QUERY, Verdict.FAIL) for item in found)
 
 
 def test_a_small_overstatement_cannot_be_shown_and_is_not_claimed_to_be():

@@ -48,13 +48,14 @@ def test_factors_of_frequency():
 
 # source: common practice, no source: ratio of density left out at a specific gravity of 0.75
 def test_factor_of_density_left_out():
-    left_out = factors(explain.density_mistakes(750.0), "power")["density is left out of power"]
+    left_out = factors(explain.density_mistakes(750.0, of_water=False), "power")["density is left out of power"]
     assert_as_printed(left_out, "1.333")
 
 
 # source: common practice, no source: the ratios 1.341 and 1.333, and 1.201 and 1.200, lie too close to tell apart
 @pytest.mark.parametrize(("gap", "least"), [(1.337, 2), (1.2005, 2)])
 def test_neighbours_are_all_named(gap, least):
-    mistakes = (*explain.UNIT_MISTAKES, *explain.density_mistakes(750.0), *explain.frequency_mistakes())
+    density = explain.density_mistakes(750.0, of_water=True)
+    mistakes = (*explain.UNIT_MISTAKES, *density, *explain.frequency_mistakes())
     named = explain.mistakes_that_close(gap, {"flow": 1, "head": 1, "power": -1}, mistakes)
     assert len(named) >= least

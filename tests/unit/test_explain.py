@@ -54,7 +54,12 @@ def test_stages_pumps_density_and_motor():
     assert mistakes_that_close(1 / 6, BALANCE, stage_mistakes(6)) == ("head is per stage",)
     assert mistakes_that_close(6.0, BALANCE, stage_mistakes(6))[0].startswith("head is that of all 6 stages")
     assert mistakes_that_close(0.5, {"flow": 1}, pump_mistakes(2)) != ()
-    assert mistakes_that_close(0.75, BALANCE, density_mistakes(750.0)) == ("density is left out of power",)
+    assert mistakes_that_close(0.75, BALANCE, density_mistakes(750.0, of_water=False)) == (
+        "density is left out of power",
+    )
+    assert mistakes_that_close(1 / 0.75, BALANCE, density_mistakes(750.0, of_water=True)) == (
+        "power is for the liquid pumped, the rest for water",
+    )
     assert mistakes_that_close(0.95, BALANCE, motor_mistakes(0.95)) == ("power is motor input, not shaft power",)
     with_efficiency = BALANCE | {"efficiency": -1}
     assert mistakes_that_close(1 / 0.95, with_efficiency, motor_mistakes(0.95)) == (
@@ -65,7 +70,7 @@ def test_stages_pumps_density_and_motor():
 def test_what_cannot_have_happened_is_not_offered():
     assert stage_mistakes(1) == ()
     assert pump_mistakes(1) == ()
-    assert density_mistakes(998.2) == ()
+    assert density_mistakes(998.2, of_water=True) == ()
     assert motor_mistakes(None) == ()
 
 

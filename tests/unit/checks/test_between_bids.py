@@ -111,7 +111,24 @@ def test_the_one_that_claims_more_is_asked_and_the_other_not_named_to_it():
     finding = same(second)
     assert finding.verdict is Verdict.QUERY
     assert "{other}" not in finding.wording.question
-    assert same(first).verdict is Verdict.PASS
+    assert same(first).verdict is Verdict.REMARK
+    assert "it claims" in same(first).wording.message
+
+
+def test_one_pump_at_two_stated_diameters_says_so():
+    curve = replace(at_speed(sound_curve(), 1480.0), impeller=0.38)
+    first, _ = together(sound_bid(), other(curve, impeller_rated=0.38))
+    assert same(first).verdict is Verdict.REMARK
+    assert "one of the diameters is wrong" in same(first).wording.message
+
+
+def test_a_nearer_twin_does_not_hide_one_that_claims_less():
+    cases = together(
+        sound_bid(),
+        other(at_speed(sound_curve(), 1480.0)),
+        replace(other(at_speed(sound_curve(), 1480.0, 1.002, efficiency=-0.04)), bidder="cedar"),
+    )
+    assert same(cases[0]).verdict is Verdict.QUERY
 
 
 def test_a_like_head_curve_alone_is_no_finding():

@@ -99,3 +99,25 @@ def test_a_mandatory_limit_missed_is_a_fail_whatever_the_step(running):
     own = replace(case.inquiry.limits.shutoff_droop, mandatory=True, mark="purchaser")
     case = replace(case, inquiry=replace(case.inquiry, limits=replace(case.inquiry.limits, shutoff_droop=own)))
     assert judge(curve_stability.CHECK, case)["towards shutoff"].verdict is Verdict.FAIL
+
+
+def test_a_head_that_rises_with_flow_all_the_way_droops_towards_shutoff():
+    q = [0, 80, 160, 240, 320, 400, 440, 480, 520, 580]
+    rising = sound_curve(head=points(q, [60.0 + 0.005 * x for x in q]))
+    finding = judge(curve_stability.CHECK, sound_case({"curves": (rising,)}))["towards shutoff"]
+    assert finding.verdict is Verdict.REMARK
+    assert float(finding.evidence["droop"].value) == pytest.approx(2.9 / 60.0, abs=0.002)
+
+
+@pytest.mark.parametrize(
+    ("factor", "stages", "verdict"),
+    [(1 / 6, 6, Verdict.QUERY), (0.3048, 1, Verdict.QUERY), (0.5, 1, Verdict.FAIL), (0.9, 6, Verdict.FAIL)],
+)
+def test_a_head_on_another_basis_is_asked_about_not_failed(factor, stages, verdict):
+    curve = sound_curve()
+    assert curve.head is not None
+    changed = replace(curve, head=replace(curve.head, value=curve.head.value * factor), stages=stages, power=None)
+    bid = {"curves": (changed,), "stages": stages, "arrangement": "vertical multistage"}
+    finding = judge(duty_head.CHECK, sound_case(bid))["rated"]
+    assert finding.verdict is verdict
+    assert ("causes" in finding.evidence) is (verdict is Verdict.QUERY)

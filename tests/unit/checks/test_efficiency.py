@@ -2,12 +2,13 @@ from dataclasses import replace
 
 import pytest
 
-from bidcheck.bid import Driver
+from bidcheck.bid import Claims, Driver
 from bidcheck.case import Case
 from bidcheck.checks import efficiency_ceiling, efficiency_claim
 from bidcheck.finding import Verdict
 from bidcheck.inquiry import Liquid
-from tests.build import sound_curve
+from bidcheck.quantity import Stated
+from tests.build import sound_curve, stated
 from tests.unit.checks.judge import judge, sound_case
 
 LADDER = {
@@ -42,8 +43,8 @@ def claimed(efficiency: float | None, **changes: object) -> Case:
         (0.853, Verdict.PASS, "plausible"),  # within the doubt of the fit, 0.4 points
         (0.8531, Verdict.REMARK, "high"),
         (0.874, Verdict.REMARK, "high"),
-        (0.8741, Verdict.QUERY, "top tenth"),
-        (0.9065, Verdict.QUERY, "top tenth"),
+        (0.8741, Verdict.QUERY, "calls practically attainable"),
+        (0.9065, Verdict.QUERY, "surveyed market"),
         (0.9066, Verdict.QUERY, "implausible"),
         (0.7488, Verdict.PASS, "plausible"),
         (0.7487, Verdict.REMARK, "low"),
@@ -196,3 +197,29 @@ def test_a_trimmed_impeller_is_not_better_than_the_full_one(gain, verdict):
 
 def test_one_diameter_alone_is_not_compared():
     assert judge(efficiency_claim.CHECK, sound_case())["rated diameter"].verdict is Verdict.NOT_APPLICABLE
+
+
+def declared(**claims: Stated) -> Case:
+    """The sound bid without an efficiency curve, these figures claimed."""
+    bare = sound_curve(efficiency=None, power=None)
+    return sound_case({"curves": (bare,), "claims": Claims(**claims)})
+
+
+def test_a_declared_best_efficiency_is_placed_and_the_curve_asked_for():
+    figures = {"bep_flow": stated(460 / 3600, 0.5 / 3600), "bep_efficiency": stated(0.93, 0.0005)}
+    found = judge(efficiency_claim.CHECK, declared(**figures))
+    assert found["best efficiency"].verdict is Verdict.QUERY
+    assert found["efficiency curve"].verdict is Verdict.NO_DATA
+    case = declared(**figures)
+    assert case.estimates.declared
+    assert "as declared" in case.estimates.basis
+
+
+def test_a_claim_at_rated_flow_is_judged_on_the_high_side_only():
+    assert judge(efficiency_claim.CHECK, declared(efficiency=stated(0.93, 0.0005)))["best efficiency"].verdict is (
+        Verdict.QUERY
+    )
+    low = judge(efficiency_claim.CHECK, declared(efficiency=stated(0.60, 0.0005)))["best efficiency"]
+    assert low.verdict is Verdict.PASS
+    nothing = judge(efficiency_claim.CHECK, declared())
+    assert nothing["best efficiency"].verdict is Verdict.NO_DATA

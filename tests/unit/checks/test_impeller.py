@@ -5,6 +5,7 @@ from typing import Any
 
 import pytest
 
+from bidcheck.bid import Claims
 from bidcheck.case import Case
 from bidcheck.checks import efficiency_ceiling, head_coefficient, tip_speed
 from bidcheck.checks.impeller_causes import figures_of, likely_causes
@@ -82,7 +83,10 @@ def test_without_a_diameter_it_is_asked_for():
 
 
 def test_without_a_best_efficiency_it_is_asked_for():
-    assert coefficient(sound_case({"curves": (sound_curve(efficiency=None, power=None),)})).verdict is Verdict.NO_DATA
+    assert (
+        coefficient(sound_case({"curves": (sound_curve(efficiency=None, power=None),), "claims": Claims()})).verdict
+        is Verdict.NO_DATA
+    )
 
 
 @pytest.mark.parametrize(

@@ -2,6 +2,7 @@ from dataclasses import replace
 
 import pytest
 
+from bidcheck.bid import Claims
 from bidcheck.case import Case
 from bidcheck.checks import regulatory_efficiency
 from bidcheck.checks.regulatory_efficiency import EU, US
@@ -89,5 +90,5 @@ def test_three_load_points_are_looked_at_where_the_curve_reaches():
 
 
 def test_without_an_efficiency_it_is_asked_for():
-    bare = sound_case({"curves": ()}, site=Site(regulations=(EU,)))
+    bare = sound_case({"curves": (), "claims": Claims()}, site=Site(regulations=(EU,)))
     assert judge(regulatory_efficiency.CHECK, bare)[EU].verdict is Verdict.NO_DATA

@@ -4,6 +4,7 @@ from dataclasses import replace
 
 import pytest
 
+from bidcheck.bid import Claims
 from bidcheck.case import Case
 from bidcheck.checks import curve_shape, efficiency_shape, npsh_form
 from bidcheck.finding import Verdict
@@ -74,7 +75,7 @@ def test_the_doubt_of_the_fit_is_given():
 def test_efficiency_that_does_not_reach_is_asked_for():
     finding = judge(efficiency_shape.CHECK, shaped("over_load", None))["over load"]
     assert finding.verdict is Verdict.NO_DATA
-    nothing = sound_case({"curves": (sound_curve(efficiency=None, power=None),)})
+    nothing = sound_case({"curves": (sound_curve(efficiency=None, power=None),), "claims": Claims()})
     assert judge(efficiency_shape.CHECK, nothing)["part load"].verdict is Verdict.NO_DATA
 
 
@@ -98,7 +99,7 @@ def test_shutoff_that_is_not_given():
     assert judge(curve_shape.CHECK, shaped("shutoff_head", None))["shutoff head"].verdict is Verdict.NO_DATA
     finding = judge(curve_shape.CHECK, shaped("shutoff_power", None))["shutoff power"]
     assert finding.verdict is Verdict.NOT_APPLICABLE
-    nothing = sound_case({"curves": (sound_curve(efficiency=None, power=None),)})
+    nothing = sound_case({"curves": (sound_curve(efficiency=None, power=None),), "claims": Claims()})
     assert judge(curve_shape.CHECK, nothing)["shutoff head"].verdict is Verdict.NO_DATA
 
 
@@ -159,7 +160,7 @@ def test_npsh3_that_is_not_given_is_asked_for():
     missing = sound_case({"curves": (sound_curve(npsh3=None),)})
     assert judge(npsh_form.CHECK, missing)["fall"].verdict is Verdict.NO_DATA
     assert judge(npsh_form.CHECK, npsh(RISING[:3]))["fall"].verdict is Verdict.NO_DATA
-    no_peak = sound_case({"curves": (sound_curve(efficiency=None, power=None),)})
+    no_peak = sound_case({"curves": (sound_curve(efficiency=None, power=None),), "claims": Claims()})
     assert judge(npsh_form.CHECK, no_peak)["fall"].verdict is Verdict.NO_DATA
 
 

@@ -9,7 +9,7 @@ from bidcheck.inquiry import Duty
 from bidcheck.quantity import Kind
 from bidcheck.read.limit_sets import limit_set
 from bidcheck.units import from_si
-from tests.build import M3H
+from tests.build import M3H, sound_curve
 from tests.unit.checks.judge import judge, sound_case
 
 US = from_si(1.0, "US", Kind.SUCTION_SPECIFIC_SPEED)
@@ -99,3 +99,23 @@ def test_suction_specific_speed(set_name, nss, inducer, verdict):
         case, inquiry=replace(case.inquiry, limits=limit_set(set_name)), bid=replace(case.bid, inducer=inducer)
     )
     assert judge(suction_specific_speed.CHECK, case)["best efficiency"].verdict is verdict
+
+
+@pytest.mark.parametrize(
+    ("npsh3", "npsha", "verdict"),
+    [
+        (4.0, 5.01, Verdict.PASS),  # the raised margin is kept, whatever the suction specific speed
+        (4.0, 4.99, Verdict.NO_DATA),  # only the ordinary one is
+        (4.0, 4.59, Verdict.QUERY),  # not even that
+    ],
+)
+def test_an_unknown_suction_specific_speed_is_not_taken_for_a_low_one(npsh3, npsha, verdict):
+    assert judge(npsh_margin.CHECK, at_npsh(npsh3, npsha, None))["rated"].verdict is verdict
+
+
+def test_suction_specific_speed_of_the_rated_curve_serves_where_the_largest_gives_no_npsh3():
+    largest = sound_curve(impeller=0.430, npsh3=None)
+    case = sound_case({"curves": (sound_curve(), largest)})
+    assert case.estimates.nss is not None
+    assert case.estimates.nss_basis == "NPSH3 of the rated diameter"
+    assert case.estimates.nss == pytest.approx(sound_case().estimates.nss, rel=1e-6)

@@ -1,6 +1,7 @@
 import pytest
 
 import bidcheck
+from bidcheck.bid import Claims
 from bidcheck.evaluation import Evaluation
 from bidcheck.quantity import UnitSystem
 from bidcheck.report.beside import beside, source_in_words, sources_of
@@ -34,7 +35,7 @@ def test_every_bid_has_a_pair_of_every_item(example):
 
 
 def test_a_bid_without_a_curve_has_dashes():
-    evaluation = bidcheck.evaluate(inquiry(bids=(sound_bid(curves=()),)))
+    evaluation = bidcheck.evaluate(inquiry(bids=(sound_bid(curves=(), claims=Claims()),)))
     assert all(row.pairs == [("–", "–")] for row in beside(evaluation, UnitSystem.SI))
     assert sources_of(evaluation.bids[0].case.estimates) == []
 
@@ -55,7 +56,7 @@ def test_every_source_is_listed_with_its_unit(example):
 
 
 def test_a_curve_without_npsh3_leaves_the_expectation():
-    evaluation = bidcheck.evaluate(inquiry(bids=(sound_bid(curves=(sound_curve(npsh3=None),)),)))
+    evaluation = bidcheck.evaluate(inquiry(bids=(sound_bid(curves=(sound_curve(npsh3=None),), claims=Claims()),)))
     offered, expected = pairs(evaluation, "NPSH3")[0]
     assert offered == "–"
     assert " to " in expected

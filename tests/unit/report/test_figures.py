@@ -6,6 +6,7 @@ from xml.etree import ElementTree
 import pytest
 
 import bidcheck
+from bidcheck.bid import Claims
 from bidcheck.curve import Fits
 from bidcheck.evaluation import Evaluation
 from bidcheck.quantity import UnitSystem
@@ -90,7 +91,7 @@ def test_an_odd_point_is_named_with_the_value_that_would_fit():
 
 @pytest.mark.parametrize("draw", FIGURES)
 def test_a_bid_without_curves_is_left_out_and_named(draw):
-    evaluation = evaluated(sound_bid(), sound_bid(bidder="cedar", curves=()))
+    evaluation = evaluated(sound_bid(), sound_bid(bidder="cedar", curves=(), claims=Claims()))
     assert "cedar a" not in texts(draw(evaluation, UnitSystem.SI))
     assert without(evaluation, "head") == without(evaluation, "npsh3") == ["cedar a"]
 
@@ -174,7 +175,7 @@ def test_the_raised_margin_is_drawn_where_a_bid_is_held_against_it():
     always = replace(base, nss_ordinary=replace(base.nss_ordinary, at_most=1.0))
     assert margins_wanted(evaluated(limits=ordinary)) == [False]
     assert margins_wanted(evaluated(limits=always)) == [True]
-    assert margins_wanted(evaluated(sound_bid(curves=()), limits=always)) == [False]
+    assert margins_wanted(evaluated(sound_bid(curves=(), claims=Claims()), limits=always)) == [False]
 
 
 def test_npsh_available_is_known_only_where_the_inquiry_gives_it():
@@ -197,7 +198,7 @@ def test_every_bid_stands_on_the_map_of_specific_speed(example):
 
 
 def test_a_bid_without_a_best_efficiency_is_named_beneath_the_map():
-    bare = sound_bid(bidder="birch", curves=(sound_curve(efficiency=None, power=None),))
+    bare = sound_bid(bidder="birch", curves=(sound_curve(efficiency=None, power=None),), claims=Claims())
     evaluation = evaluated(sound_bid(), bare)
     assert off_the_map(evaluation) == ["birch a"]
     assert "birch a" not in texts(window_figure(evaluation, UnitSystem.SI))

@@ -6,6 +6,7 @@ from html.parser import HTMLParser
 import pytest
 
 import bidcheck
+from bidcheck.bid import Claims
 from bidcheck.errors import Problem
 from bidcheck.evaluation import Evaluation, Outcome
 from bidcheck.inquiry import UnreadableBid
@@ -182,13 +183,13 @@ def test_a_bid_left_out_is_named_with_every_problem():
 
 @pytest.mark.parametrize("missing", ["head", "efficiency", "power", "npsh3"])
 def test_a_curve_without_one_column_makes_a_page(missing):
-    bids = (sound_bid(), sound_bid(bidder="cedar", curves=(sound_curve(**{missing: None}),)))
+    bids = (sound_bid(), sound_bid(bidder="cedar", curves=(sound_curve(**{missing: None}),), claims=Claims()))
     text = words_of(evaluation_page(bidcheck.evaluate(inquiry(bids=bids)), system=UnitSystem.SI))
     assert text.count("Not drawn") == {"head": 2, "npsh3": 1}.get(missing, 0)  # no head, no specific speed
 
 
 def test_a_bid_without_any_curve_is_named_beneath_every_figure():
-    bids = (sound_bid(), sound_bid(bidder="cedar", curves=()))
+    bids = (sound_bid(), sound_bid(bidder="cedar", curves=(), claims=Claims()))
     text = words_of(evaluation_page(bidcheck.evaluate(inquiry(bids=bids)), system=UnitSystem.SI))
     assert text.count("Not drawn, for want of points: cedar a.") == 4
 
