@@ -22,7 +22,7 @@ def run(case: Case) -> Iterator[Measured]:
     bep = case.pumped.bep if case.pumped is not None else None
     if bep is not None:
         compared = within(rated / bep.flow, limit)
-        unsure = not compared.holds and any(within(rated / q, limit).holds for q in bep.flow_interval or ())
+        unsure = not compared.holds and any(within(rated / q, limit).holds for q in bep.flow_interval or () if q > 0.0)
         evidence = {"rated_flow": flow(rated), "bep_flow": flow(bep.flow), "ratio": whole_share(rated / bep.flow)}
         if unsure:
             evidence |= _interval(bep, case)
