@@ -153,6 +153,7 @@ def _suction_specific_speed(estimates: Estimates) -> dict[str, Any] | None:
     return {
         "metric": number(estimates.nss),
         "us": number(from_si(estimates.nss, "US", Kind.SUCTION_SPECIFIC_SPEED)),
+        "basis": estimates.nss_basis,
     }
 
 
