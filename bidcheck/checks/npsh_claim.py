@@ -93,7 +93,7 @@ CHECK = Check(
     source="common practice, no source: ordinary suction specific speeds",
     wordings={
         "": Wording(
-            "NPSH3 {npsh3} {where}, is what ordinary impellers show ({ordinary_from} to {ordinary_to}; suction"
+            "NPSH3 {npsh3} {where} is what ordinary impellers show ({ordinary_from} to {ordinary_to}; suction"
             " specific speed {nss})."
         ),
         "between": Wording(
@@ -101,17 +101,17 @@ CHECK = Check(
             " beyond belief (suction specific speed {nss})."
         ),
         "low": Wording(
-            "NPSH3 {npsh3} {where}, is hard to believe without an inducer: ordinary impellers need"
+            "NPSH3 {npsh3} {where} is hard to believe without an inducer: ordinary impellers need"
             " {ordinary_from} to {ordinary_to}. It implies a suction specific speed of {nss}.",
             "You state NPSH3 {npsh3} {where}; ordinary impellers of this speed and flow need {ordinary_from} to"
             " {ordinary_to}. Please send the NPSH test of this hydraulic, at 3 % head drop, with cold water.",
         ),
         "high": Wording(
-            "NPSH3 {npsh3} {where}, is poor for this speed and flow, or wrong: ordinary impellers need"
+            "NPSH3 {npsh3} {where} is poor for this speed and flow, or wrong: ordinary impellers need"
             " {ordinary_from} to {ordinary_to} (suction specific speed {nss})."
         ),
         "explained": Wording(
-            "NPSH3 {npsh3} {where}, lies outside what ordinary impellers show, {ordinary_from} to"
+            "NPSH3 {npsh3} {where} lies outside what ordinary impellers show, {ordinary_from} to"
             " {ordinary_to}. One mistake would explain it: {cause}.",
             "You state NPSH3 {npsh3} {where}, where {ordinary_from} to {ordinary_to} is ordinary. It looks as"
             " if {cause}. Please confirm and correct.",
