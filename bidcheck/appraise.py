@@ -1,7 +1,7 @@
 """Independent estimates of one bid: what a pump of its best efficiency point should show, beside what it offers."""
 
 from math import log
-from typing import NamedTuple
+from typing import Literal, NamedTuple
 
 from bidcheck.basis import viscosity_matters
 from bidcheck.bid import Bid
@@ -52,8 +52,8 @@ source."""
 class Best(NamedTuple):
     """Best efficiency point with water, head of one stage; half the 95 % interval of its efficiency.
 
-    `words` say where it comes from if not from the points; `low_side` is False where a claim at rated flow stands in,
-    which may be below the best.
+    `words` say where it comes from if not from the points, `declared` which claim stands in; one at rated flow may be
+    below the best.
     """
 
     flow: float
@@ -62,7 +62,7 @@ class Best(NamedTuple):
     interval: float | None
     corrected: bool = False
     words: str = ""
-    low_side: bool = True
+    declared: Literal["", "best efficiency", "rated flow"] = ""
 
 
 class Npsh3(NamedTuple):
@@ -139,13 +139,13 @@ def _declared(bid: Bid, fits: Fits | None, at_duty: AtFlow) -> Best | None:
     if flow is not None and efficiency is not None and head is not None and head > 0:
         doubt = efficiency.half_digit + CLAIM_DOUBT
         words = "best efficiency as declared, the points show none"
-        return Best(flow.value, head / bid.stages, efficiency.value, doubt, words=words)
+        return Best(flow.value, head / bid.stages, efficiency.value, doubt, words=words, declared="best efficiency")
     claim = bid.claims.efficiency
     if claim is None or at_duty.head is None or at_duty.head <= 0:
         return None
     words = "claim at rated flow, taken as best efficiency for want of a curve"
     doubt = claim.half_digit + CLAIM_DOUBT
-    return Best(at_duty.flow, at_duty.head / bid.stages, claim.value, doubt, words=words, low_side=False)
+    return Best(at_duty.flow, at_duty.head / bid.stages, claim.value, doubt, words=words, declared="rated flow")
 
 
 def _npsh3(best: Best, fits: Fits | None, rated: Fits | None, at_duty: AtFlow) -> Npsh3 | None:
@@ -173,7 +173,7 @@ def _nothing(why: str) -> Estimates:
         basis=why,
         best_flow=None,
         best_head=None,
-        declared=False,
+        declared="",
         efficiency=None,
         offered_efficiency=None,
         offered_interval=None,
@@ -203,7 +203,7 @@ def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, best: Best, nps
         basis=basis,
         best_flow=best.flow,
         best_head=best.head,
-        declared=bool(best.words) and not best.corrected,
+        declared=best.declared,
         efficiency=estimate_efficiency(
             arrangement=bid.arrangement,
             nq=nq,
@@ -217,7 +217,7 @@ def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, best: Best, nps
         ),
         offered_efficiency=best.efficiency,
         offered_interval=best.interval,
-        trim_allowance=_trim_allowance(bid, curve) if best.low_side else 1.0,
+        trim_allowance=_trim_allowance(bid, curve) if best.declared != "rated flow" else 1.0,
         corrected=best.corrected,
         impeller=estimate_impeller(
             nq_eye=nq_eye,

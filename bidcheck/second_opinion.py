@@ -2,6 +2,7 @@
 
 from collections.abc import Mapping
 from dataclasses import dataclass
+from typing import Literal
 
 from bidcheck.quantity import Kind
 
@@ -172,8 +173,9 @@ class Estimates:
     """Best efficiency flow with water that everything here belongs to [m³/s]."""
     best_head: float | None
     """Head of one stage there [m]."""
-    declared: bool
-    """Whether best efficiency is the bidder's word, because the points show none."""
+    declared: Literal["", "best efficiency", "rated flow"]
+    """Where best efficiency is the bidder's word because the points show none: the one declared, or the claim at rated
+    flow in its place; empty where the points show it."""
     efficiency: EfficiencyEstimate | None
     offered_efficiency: float | None
     """Efficiency at best efficiency point of the bidder's own curve on the same basis (maximum diameter)."""

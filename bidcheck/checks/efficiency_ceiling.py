@@ -9,7 +9,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.derived_efficiency import mistakes_behind
-from bidcheck.checks.evidence import points, share, text
+from bidcheck.checks.evidence import points, share, text, whose_words
 from bidcheck.checks.impeller_causes import likely_causes
 from bidcheck.checks.request import asked, not_applicable
 from bidcheck.explain import in_words
@@ -41,6 +41,7 @@ def run(case: Case) -> Iterator[Measured]:
         "above_ceiling": points(max(claim - estimate.ceiling, 0.0)),
         "doubt": points(doubt),
     }
+    evidence |= whose_words(case)
     evidence |= {name.replace(" ", "_"): share(loss) for name, loss in estimate.ceiling_terms.items()}
     compared = within(claim, limit, slack=doubt)
     causes = () if compared.holds else (*likely_causes(case), *mistakes_behind(case))
@@ -64,23 +65,23 @@ CHECK = Check(
     source="loss balance: Daily and Nece 1960 (disc friction), Gülich Table 3.5 (leakage)",
     wordings={
         "above, no diameter": Wording(
-            "Best efficiency {claim} is {above_ceiling} above the ceiling {ceiling} that disc friction, leakage and the"
+            "{what} {claim} is {above_ceiling} above the ceiling {ceiling} that disc friction, leakage and the"
             " best hydraulic efficiency leave for the smallest diameter likely at this speed and head.",
-            "Your curve peaks at {claim}, more than the losses of any likely impeller leave at this speed, head and"
+            "{you} {claim}, more than the losses of any likely impeller leave at this speed, head and"
             " flow ({ceiling}). Please state the impeller diameter, and correct the efficiency or the figures it"
             " belongs to.",
         ),
         "explained": Wording(
-            "Best efficiency {claim} is {above_ceiling} above the ceiling {ceiling} that the losses leave for the"
+            "{what} {claim} is {above_ceiling} above the ceiling {ceiling} that the losses leave for the"
             " offered diameter, speed and flow. It would be explained if {causes}.",
-            "Your curve peaks at {claim}, more than the losses of your diameter, speed and flow leave ({ceiling}). It"
+            "{you} {claim}, more than the losses of your diameter, speed and flow leave ({ceiling}). It"
             " looks as if {causes}. Please confirm and correct.",
         ),
-        "": Wording("Best efficiency {claim} stays below the loss ceiling, {ceiling}."),
+        "": Wording("{what} {claim} stays below the loss ceiling, {ceiling}."),
         "above": Wording(
-            "Best efficiency {claim} is {above_ceiling} above the ceiling {ceiling} that disc friction, leakage and"
+            "{what} {claim} is {above_ceiling} above the ceiling {ceiling} that disc friction, leakage and"
             " the best hydraulic efficiency leave for the offered diameter, speed and flow.",
-            "Your curve peaks at {claim}, more than the losses of your own impeller diameter, speed and flow leave"
+            "{you} {claim}, more than the losses of your own impeller diameter, speed and flow leave"
             " ({ceiling}). Please correct the efficiency, or the diameter, speed or flow it belongs to.",
         ),
     },

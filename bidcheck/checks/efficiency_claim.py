@@ -19,7 +19,7 @@ figures.
 from collections.abc import Iterator
 
 from bidcheck.case import Case
-from bidcheck.checks.evidence import points, share, specific_speed, text
+from bidcheck.checks.evidence import points, share, specific_speed, text, whose_words
 from bidcheck.checks.motor_losses import losses_that_explain
 from bidcheck.checks.request import asked, not_applicable
 from bidcheck.curve import BestEfficiency, Fits
@@ -34,11 +34,11 @@ CHART = "Hydraulic Institute chart of attainable efficiency, clean cold water"
 MIDDLE = "{distance} {side} the expected {expected}"
 BEYOND = "{above_attainable} above what the published chart calls practically attainable ({attainable})"
 CERTIFIED_TEST = (
-    "Your curve peaks at {claim}; for this flow and specific speed the published chart of attainable efficiency gives"
+    "{you} {claim}; for this flow and specific speed the published chart of attainable efficiency gives"
     " {attainable}. Please send the certified test of this hydraulic, with standard and grade."
 )
 TEST_CERTIFICATE = (
-    "Your curve peaks at {claim}, above {attainable}, which the published chart calls practically attainable. Please"
+    "{you} {claim}, above {attainable}, which the published chart calls practically attainable. Please"
     " send a test certificate of this hydraulic."
 )
 
@@ -168,7 +168,7 @@ def _below(estimate: EfficiencyEstimate, claim: float, allowance: float) -> tupl
 
 def _evidence(case: Case, estimate: EfficiencyEstimate, claim: float) -> dict[str, Evidence]:
     """The whole picture: claim, expected, attainable, distance, place in the market, specific speed."""
-    found: dict[str, Evidence] = {"claim": share(claim)}
+    found: dict[str, Evidence] = {"claim": share(claim)} | whose_words(case)
     if case.estimates.nq is not None:
         found["nq"] = specific_speed(case.estimates.nq)
     if estimate.expected is not None:
@@ -197,7 +197,7 @@ CHECK = Check(
         " attainable efficiency"
     ),
     wordings={
-        "": Wording("Best efficiency {claim} is plausible: {distance} {side} the expected {expected}."),
+        "": Wording("{what} {claim} is plausible: {distance} {side} the expected {expected}."),
         "trimmed": Wording(
             "Best efficiency {rated} at the rated diameter agrees with {largest} at the largest: trimming does not"
             " raise it."
@@ -209,38 +209,34 @@ CHECK = Check(
             " raise efficiency: please say which holds, and send the test behind it.",
         ),
         "no expected value": Wording(
-            "Best efficiency {claim} stays below what the published chart calls attainable; for this arrangement and"
+            "{what} {claim} stays below what the published chart calls attainable; for this arrangement and"
             " size there is no expected value, so a low claim is not judged."
         ),
-        "implausible": Wording(f"Best efficiency {{claim}} is implausible: {MIDDLE}, and {BEYOND}.", CERTIFIED_TEST),
-        "implausible, no expected value": Wording(
-            f"Best efficiency {{claim}} is implausible: {BEYOND}.", CERTIFIED_TEST
-        ),
+        "implausible": Wording(f"{{what}} {{claim}} is implausible: {MIDDLE}, and {BEYOND}.", CERTIFIED_TEST),
+        "implausible, no expected value": Wording(f"{{what}} {{claim}} is implausible: {BEYOND}.", CERTIFIED_TEST),
         "above attainable": Wording(
-            f"Best efficiency {{claim}} is {BEYOND}; {MIDDLE}. Of the surveyed market {{market_below}} lies below it.",
+            f"{{what}} {{claim}} is {BEYOND}; {MIDDLE}. Of the surveyed market {{market_below}} lies below it.",
             TEST_CERTIFICATE,
         ),
-        "above attainable, not surveyed": Wording(
-            f"Best efficiency {{claim}} is {BEYOND}; {MIDDLE}.", TEST_CERTIFICATE
-        ),
-        "above attainable, no expected value": Wording(f"Best efficiency {{claim}} is {BEYOND}.", TEST_CERTIFICATE),
-        "high": Wording(f"Best efficiency {{claim}} is high for this size and specific speed: {MIDDLE}."),
+        "above attainable, not surveyed": Wording(f"{{what}} {{claim}} is {BEYOND}; {MIDDLE}.", TEST_CERTIFICATE),
+        "above attainable, no expected value": Wording(f"{{what}} {{claim}} is {BEYOND}.", TEST_CERTIFICATE),
+        "high": Wording(f"{{what}} {{claim}} is high for this size and specific speed: {MIDDLE}."),
         "low": Wording(
-            f"Best efficiency {{claim}} is low for this size and specific speed: {MIDDLE}, about the worst tenth of the"
+            f"{{what}} {{claim}} is low for this size and specific speed: {MIDDLE}, about the worst tenth of the"
             " surveyed market."
         ),
         "low, explained": Wording(
-            f"Best efficiency {{claim}} is low for this size and specific speed: {MIDDLE}, about the worst tenth of the"
+            f"{{what}} {{claim}} is low for this size and specific speed: {MIDDLE}, about the worst tenth of the"
             " surveyed market. Something else would explain it: {causes}."
         ),
         "very low, explained": Wording(
-            f"Best efficiency {{claim}} is very low for a pump alone: {MIDDLE}. Likely cause: {{causes}}.",
-            "Your curve peaks at {claim}. It looks as if {causes}. Please confirm, and state the efficiency of the pump"
+            f"{{what}} {{claim}} is very low for a pump alone: {MIDDLE}. Likely cause: {{causes}}.",
+            "{you} {claim}. It looks as if {causes}. Please confirm, and state the efficiency of the pump"
             " alone at shaft power.",
         ),
         "very low": Wording(
-            f"Best efficiency {{claim}} is very low for this size and specific speed: {MIDDLE}.",
-            "Your curve peaks at {claim}, well below what pumps of this size and specific speed show. Please confirm"
+            f"{{what}} {{claim}} is very low for this size and specific speed: {MIDDLE}.",
+            "{you} {claim}, well below what pumps of this size and specific speed show. Please confirm"
             " units, stages and best efficiency flow, and that no motor or gear losses are included.",
         ),
     },

@@ -1,8 +1,13 @@
 """Short names for evidence of each kind. Values in SI; shares and efficiencies as fractions."""
 
+from typing import TYPE_CHECKING
+
 from bidcheck.curve import COLUMN_KINDS, Column
 from bidcheck.finding import Evidence
 from bidcheck.quantity import Kind
+
+if TYPE_CHECKING:
+    from bidcheck.case import Case
 
 
 def flow(value: float) -> Evidence:
@@ -78,6 +83,17 @@ def tip_speed(value: float) -> Evidence:
 def text(value: str) -> Evidence:
     """Words."""
     return Evidence(value, Kind.TEXT)
+
+
+def whose_words(case: "Case") -> dict[str, Evidence]:
+    """What the efficiency judged is, and how to speak of it to the bidder."""
+    words = {
+        "": ("best efficiency", "Your curve peaks at"),
+        "best efficiency": ("declared best efficiency", "You declare as best efficiency"),
+        "rated flow": ("efficiency claimed at rated flow", "You claim at rated flow"),
+    }
+    what, you = words[case.estimates.declared]
+    return {"what": text(what), "you": text(you)}
 
 
 def of_column(value: float, column: Column) -> Evidence:

@@ -98,7 +98,8 @@ def message(finding: Finding, system: UnitSystem) -> str:
 
 def question(finding: Finding, system: UnitSystem) -> str:
     """The question to the bidder; empty where there is nothing to ask."""
-    return _fill(finding.wording.question, finding, system) if asks(finding) else ""
+    text = _fill(finding.wording.question, finding, system) if asks(finding) else ""
+    return text[:1].upper() + text[1:]
 
 
 def asks(finding: Finding) -> bool:

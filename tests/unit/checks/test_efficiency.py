@@ -7,7 +7,8 @@ from bidcheck.case import Case
 from bidcheck.checks import efficiency_ceiling, efficiency_claim
 from bidcheck.finding import Verdict
 from bidcheck.inquiry import Liquid
-from bidcheck.quantity import Stated
+from bidcheck.quantity import Stated, UnitSystem
+from bidcheck.report.words import message, question
 from tests.build import sound_curve, stated
 from tests.unit.checks.judge import judge, sound_case
 
@@ -211,8 +212,10 @@ def test_a_declared_best_efficiency_is_placed_and_the_curve_asked_for():
     assert found["best efficiency"].verdict is Verdict.QUERY
     assert found["efficiency curve"].verdict is Verdict.NO_DATA
     case = declared(**figures)
-    assert case.estimates.declared
+    assert case.estimates.declared == "best efficiency"
     assert "as declared" in case.estimates.basis
+    assert message(found["best efficiency"], UnitSystem.SI).startswith("Declared best efficiency 93.0 % is")
+    assert question(found["best efficiency"], UnitSystem.SI).startswith("You declare as best efficiency 93.0 %")
 
 
 def test_a_claim_at_rated_flow_is_judged_on_the_high_side_only():
@@ -221,5 +224,6 @@ def test_a_claim_at_rated_flow_is_judged_on_the_high_side_only():
     )
     low = judge(efficiency_claim.CHECK, declared(efficiency=stated(0.60, 0.0005)))["best efficiency"]
     assert low.verdict is Verdict.PASS
+    assert message(low, UnitSystem.SI).startswith("Efficiency claimed at rated flow 60.0 %")
     nothing = judge(efficiency_claim.CHECK, declared())
     assert nothing["best efficiency"].verdict is Verdict.NO_DATA
