@@ -10,7 +10,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import ratio, text
-from bidcheck.checks.request import Item, asked, not_applicable
+from bidcheck.checks.request import asked, asked_in_water, not_applicable
 from bidcheck.checks.verdicts import missed
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import Limit, within
@@ -21,9 +21,8 @@ def run(case: Case) -> Iterator[Measured]:
     """Compare shutoff head and power with the shapes published."""
     shape, limits = case.estimates.shape, case.inquiry.limits
     if shape is None:
-        missing: Item = "water curve" if case.water and case.curve is not None else "best efficiency"
-        yield asked("shutoff head", missing)
-        yield asked("shutoff power", missing)
+        yield asked_in_water(case, "shutoff head", "best efficiency")
+        yield asked_in_water(case, "shutoff power", "best efficiency")
         return
     if shape.shutoff_head.offered is None:
         yield asked("shutoff head", "shutoff head")

@@ -11,7 +11,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import points, share, text, whole_share
-from bidcheck.checks.request import asked, not_applicable
+from bidcheck.checks.request import asked, asked_in_water, not_applicable
 from bidcheck.checks.unlike import at_most_remark
 from bidcheck.checks.verdicts import missed
 from bidcheck.estimates.curve_shape import OVER, PART
@@ -25,7 +25,7 @@ def run(case: Case) -> Iterator[Measured]:
     shape = case.estimates.shape
     for subject, flow_over_bep in (("part load", PART), ("over load", OVER)):
         if shape is None:
-            yield asked(subject, "water curve" if case.water and case.curve is not None else "best efficiency")
+            yield asked_in_water(case, subject, "best efficiency")
         else:
             ratio = shape.part_load if flow_over_bep < 1 else shape.over_load
             yield _compared(case, subject, flow_over_bep, ratio)

@@ -12,7 +12,7 @@ from collections.abc import Iterator
 from bidcheck.case import Case
 from bidcheck.checks.evidence import diameter, ratio, specific_speed, text
 from bidcheck.checks.impeller_causes import figures_of, likely_causes
-from bidcheck.checks.request import Item, asked, not_applicable
+from bidcheck.checks.request import asked, asked_in_water, not_applicable
 from bidcheck.checks.unlike import at_most_remark
 from bidcheck.checks.verdicts import missed
 from bidcheck.explain import in_words
@@ -29,8 +29,7 @@ def run(case: Case) -> Iterator[Measured]:
     """Compare the head coefficient at best efficiency with the expected one."""
     impeller = case.estimates.impeller
     if impeller is None:
-        missing: Item = "water curve" if case.water and case.curve is not None else "best efficiency"
-        yield asked("best efficiency", missing)
+        yield asked_in_water(case, "best efficiency", "best efficiency")
     elif impeller.diameter is None:
         yield asked("best efficiency", "impeller diameters")
     else:

@@ -11,7 +11,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import npsh, suction_specific_speed, text
-from bidcheck.checks.request import Item, asked, not_applicable
+from bidcheck.checks.request import asked_in_water, not_applicable
 from bidcheck.checks.unlike import at_most_remark
 from bidcheck.checks.verdicts import missed
 from bidcheck.estimates.npsh3_expected import HIGHEST_NSS, LOWEST_NSS
@@ -30,8 +30,7 @@ def run(case: Case) -> Iterator[Measured]:
     estimates = case.estimates
     suction, nss = estimates.suction, estimates.nss
     if suction is None or suction.offered is None or nss is None:
-        missing: Item = "water curve" if case.water and case.curve is not None else "NPSH3 at best efficiency"
-        yield asked("best efficiency", missing)
+        yield asked_in_water(case, "best efficiency", "NPSH3 at best efficiency")
         return
     yield _placed(case, suction, suction.offered, nss)
 

@@ -12,7 +12,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import count, ratio, share, text
-from bidcheck.checks.request import asked, not_applicable
+from bidcheck.checks.request import asked_in_water, not_applicable
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import within
 from bidcheck.second_opinion import RegulationEstimate
@@ -32,7 +32,7 @@ def run(case: Case) -> Iterator[Measured]:
         elif reason := _other_liquid(case):
             yield not_applicable(name, reason)
         elif case.estimates.regulation is None:
-            yield asked(name, "water curve" if case.water and case.curve is not None else "best efficiency")
+            yield asked_in_water(case, name, "best efficiency")
         else:
             yield (_eu if name == EU else _us)(case, case.estimates.regulation)
 

@@ -88,6 +88,11 @@ def asked_for_curve(case: "Case", subject: str, *, decisive: bool = False) -> Me
     return asked(subject, missing, decisive=decisive)
 
 
+def asked_in_water(case: "Case", subject: str, missing: Item) -> Measured:
+    """No data because the curve for water is wanted, or `missing` where there is one, or no curve at all."""
+    return asked(subject, "water curve" if case.water and case.curve is not None else missing)
+
+
 def ours(subject: str, missing: str) -> Measured:
     """No data because the inquiry itself lacks a figure; nothing to ask the bidder."""
     return Measured(subject=subject, verdict=Verdict.NO_DATA, evidence={"missing": text(missing)}, wording="ours")

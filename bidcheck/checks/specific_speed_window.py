@@ -8,7 +8,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import flow, specific_speed, text
-from bidcheck.checks.request import Item, asked
+from bidcheck.checks.request import asked_in_water
 from bidcheck.estimates.window import specific_speed_window
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import Limit, within
@@ -19,8 +19,7 @@ def run(case: Case) -> Iterator[Measured]:
     """Compare specific speed at best efficiency with the window of its flow."""
     nq, best_flow = case.estimates.nq, case.estimates.best_flow
     if nq is None or best_flow is None:
-        missing: Item = "water curve" if case.water and case.curve is not None else "best efficiency"
-        yield asked("best efficiency", missing)
+        yield asked_in_water(case, "best efficiency", "best efficiency")
         return
     window = specific_speed_window(best_flow)
     limit = Limit(

@@ -10,7 +10,7 @@ from collections.abc import Iterator
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import suction_specific_speed, text
-from bidcheck.checks.request import Item, asked
+from bidcheck.checks.request import asked_in_water
 from bidcheck.finding import Check, Measured, Verdict, Wording
 from bidcheck.limits import within
 
@@ -19,8 +19,7 @@ def run(case: Case) -> Iterator[Measured]:
     """Compare suction specific speed with the caps."""
     nss, limits = case.estimates.nss, case.inquiry.limits
     if nss is None:
-        missing: Item = "water curve" if case.water and case.curve is not None else "NPSH3 at best efficiency"
-        yield asked("best efficiency", missing)
+        yield asked_in_water(case, "best efficiency", "NPSH3 at best efficiency")
         return
     high = within(nss, limits.suction_specific_speed_high)
     ordinary = within(nss, limits.suction_specific_speed)
