@@ -64,6 +64,7 @@ def test_the_diameters_stand_beside_one_another():
     evidence = coefficient(with_ratio(1.1)).evidence
     assert float(evidence["expected_diameter"].value) == pytest.approx(expected_diameter(), rel=1e-6)
     assert float(evidence["cordier_diameter"].value) == pytest.approx(expected_diameter(), rel=0.05)
+    assert float(evidence["offered"].value) == pytest.approx(1.1 * float(evidence["expected"].value), rel=1e-6)
 
 
 @pytest.mark.parametrize("arrangement", ["solids handling", "vertical turbine", "submersible multistage", "sealless"])
@@ -71,7 +72,9 @@ def test_unlike_arrangements_get_a_remark_inside_what_impellers_show(arrangement
     assert coefficient(with_ratio(0.70, arrangement)).verdict is Verdict.REMARK
 
 
-@pytest.mark.parametrize(("ratio", "verdict"), [(0.5, Verdict.REMARK), (1.9, Verdict.REMARK), (0.25, Verdict.QUERY)])
+@pytest.mark.parametrize(
+    ("ratio", "verdict"), [(0.5, Verdict.REMARK), (1.9, Verdict.REMARK), (0.25, Verdict.QUERY), (4.0, Verdict.QUERY)]
+)
 def test_unlike_arrangements_are_asked_only_where_no_impeller_explains_it(ratio, verdict):
     assert coefficient(with_ratio(ratio, "solids handling")).verdict is verdict
 
