@@ -133,9 +133,15 @@ def _same_diameter(case: Case, other: Case, ratio: float) -> bool | None:
 
 
 def _alike(case: Case, other: Case) -> bool:
-    """Whether specific speeds are near enough for the curves to coincide; true where one is unknown."""
+    """Whether specific speeds are near enough for the curves to coincide; true where one is unknown.
+
+    At another speed specific speed stays; at another diameter it goes against the diameter.
+    """
     a, b = case.estimates.nq, other.estimates.nq
-    return a is None or b is None or abs(a / b - 1.0) <= LIKE
+    if a is None or b is None:
+        return True
+    speed = case.bid.speed_rpm / other.bid.speed_rpm
+    return any(abs(a / b * ratio / speed - 1.0) <= LIKE for ratio in _ratios(case, other))
 
 
 def _ratios(case: Case, other: Case) -> Iterator[float]:

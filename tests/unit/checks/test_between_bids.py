@@ -155,3 +155,85 @@ def test_other_eyes_and_specific_speeds_are_not_compared():
     double = other(sound_curve(), arrangement="double suction", suction_eyes=2)
     assert same(together(sound_bid(), double)[0]).verdict is Verdict.PASS
     assert same(together(sound_bid(), other(at_speed(sound_curve(), 1480.0, 1.3)))[0]).verdict is Verdict.PASS
+
+
+def changed(curve: Curve, column: str, flow: float = 1.0, value: float = 1.0, shift: float = 0.0) -> Curve:
+    """The curve with one column's flows and values multiplied, and its values moved."""
+    points = curve.points(column)  # type: ignore[arg-type]
+    assert points is not None
+    new = replace(points, flow=points.flow * flow, value=np.maximum(points.value * value + shift, 0.0))
+    return replace(curve, **{column: new})
+
+
+@pytest.mark.parametrize(
+    ("column", "value", "shift", "verdict"),
+    [
+        ("efficiency", 1.0, 0.007, Verdict.REMARK),
+        ("efficiency", 1.0, 0.012, Verdict.PASS),
+        ("efficiency", 1.0, -0.012, Verdict.PASS),
+        ("npsh3", 1.045, 0.0, Verdict.REMARK),
+        ("npsh3", 1.06, 0.0, Verdict.PASS),
+        ("npsh3", 0.93, 0.0, Verdict.PASS),
+    ],
+)
+def test_every_curve_both_bids_give_must_agree(column, value, shift, verdict):
+    second = changed(at_speed(sound_curve(), 1480.0), column, value=value, shift=shift)
+    cases = together(sound_bid(), other(second))
+    assert same(cases[0]).verdict is verdict
+    assert same(cases[1]).verdict is verdict
+
+
+def test_head_alone_does_not_make_one_pump_of_two():
+    bare = sound_curve(efficiency=None, power=None, npsh3=None)
+    cases = together(sound_bid(curves=(bare,)), other(bare))
+    assert [same(case).verdict for case in cases] == [Verdict.PASS, Verdict.PASS]
+    with_npsh3 = sound_curve(efficiency=None, power=None)
+    assert same(together(sound_bid(curves=(with_npsh3,)), other(with_npsh3))[0]).verdict is Verdict.REMARK
+
+
+def test_the_same_stage_in_another_number_is_one_pump():
+    curve = at_speed(sound_curve(), 1480.0)
+    two = replace(changed(curve, "head", value=2.0), stages=2)
+    assert same(together(sound_bid(), other(two, stages=2))[0]).verdict is Verdict.REMARK
+    assert same(together(sound_bid(), other(replace(two, stages=1), stages=1))[0]).verdict is Verdict.PASS
+
+
+@pytest.mark.parametrize(("stated", "verdict"), [(0.412 * 1.06, Verdict.REMARK), (None, Verdict.PASS)])
+def test_another_diameter_is_brought_to_one_where_both_state_it(stated, verdict):
+    curve = at_speed(sound_curve(), 1480.0)
+    for column, value in (("head", 1.06**2), ("efficiency", 1.0), ("npsh3", 1.06**2)):
+        curve = changed(curve, column, flow=1.06, value=value)
+    curve = replace(curve, impeller=stated)
+    finding = same(together(sound_bid(), other(curve, impeller_rated=stated, impeller_max=None))[0])
+    assert finding.verdict is verdict
+    if verdict is Verdict.REMARK:
+        assert "one of the diameters is wrong" not in finding.wording.message
+
+
+def test_curves_that_share_too_little_are_not_compared():
+    curve = at_speed(sound_curve(), 1480.0)
+    head = curve.head
+    assert head is not None
+    few = replace(
+        head,
+        flow=head.flow[:6],
+        value=head.value[:6],
+        flow_half_digit=head.flow_half_digit[:6],
+        value_half_digit=head.value_half_digit[:6],
+        line=head.line[:6],
+    )
+    cases = together(sound_bid(), other(replace(curve, head=few)))
+    assert same(cases[0]).verdict is Verdict.PASS
+    assert "No other bid" in same(cases[0]).wording.message
+
+
+@pytest.mark.parametrize(("factor", "verdict"), [(1.004, Verdict.QUERY), (1.007, Verdict.PASS)])
+def test_claiming_more_is_asked_about_only_where_heads_are_nearly_one(factor, verdict):
+    lifted = at_speed(sound_curve(), 1480.0, factor, efficiency=0.04)
+    assert same(together(sound_bid(), other(lifted))[1]).verdict is verdict
+
+
+@pytest.mark.parametrize(("more", "verdict"), [(0.018, Verdict.PASS), (0.024, Verdict.QUERY)])
+def test_two_points_more_on_one_pump_are_asked_about(more, verdict):
+    lifted = at_speed(sound_curve(), 1480.0, efficiency=more)
+    assert same(together(sound_bid(), other(lifted))[1]).verdict is verdict

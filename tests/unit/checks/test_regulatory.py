@@ -92,3 +92,58 @@ def test_three_load_points_are_looked_at_where_the_curve_reaches():
 def test_without_an_efficiency_it_is_asked_for():
     bare = sound_case({"curves": (), "claims": Claims()}, site=Site(regulations=(EU,)))
     assert judge(regulatory_efficiency.CHECK, bare)[EU].verdict is Verdict.NO_DATA
+
+
+def doubtful(case: Case, interval: float, trim: float = 0.0) -> Case:
+    """The case with a doubt of its efficiency, spread of the market 4 points, offered 80 %."""
+    assert case.estimates.efficiency is not None
+    efficiency = replace(case.estimates.efficiency, sigma=0.04)
+    changed = {
+        "efficiency": efficiency,
+        "offered_efficiency": 0.8,
+        "offered_interval": interval,
+        "trim_allowance": trim,
+    }
+    return replace(case, estimates=replace(case.estimates, **changed))
+
+
+@pytest.mark.parametrize(
+    ("index", "interval", "trim", "verdict"),
+    [
+        (0.351, 0.005, 0.0, Verdict.REMARK),  # 0.4 × 0.5 points over 4 points of spread: 0.05
+        (0.349, 0.005, 0.0, Verdict.QUERY),
+        (0.301, 0.005, 0.005, Verdict.REMARK),
+        (0.299, 0.005, 0.005, Verdict.QUERY),
+        (0.39, float("inf"), 0.0, Verdict.QUERY),
+    ],
+)
+def test_the_doubt_of_the_index(index, interval, trim, verdict):
+    case = doubtful(regulated(EU, eu_index=index), interval, trim)
+    assert judge(regulatory_efficiency.CHECK, case)[EU].verdict is verdict
+
+
+@pytest.mark.parametrize(
+    ("ratio", "interval", "trim", "verdict"),
+    [
+        (1.009, 0.008, 0.0, Verdict.PASS),  # 0.8 points of 80 %: 1 %
+        (1.011, 0.008, 0.0, Verdict.REMARK),
+        (1.019, 0.008, 0.008, Verdict.PASS),
+        (1.021, 0.008, 0.008, Verdict.REMARK),
+        (1.001, float("inf"), 0.0, Verdict.REMARK),
+    ],
+)
+def test_the_doubt_of_the_power_allowed(ratio, interval, trim, verdict):
+    case = doubtful(regulated(US, us_ratio=ratio), interval, trim)
+    assert judge(regulatory_efficiency.CHECK, case)[US].verdict is verdict
+
+
+@pytest.mark.parametrize(("temperature", "covered"), [(263.15, True), (393.15, True), (263.0, False), (393.3, False)])
+def test_the_range_of_temperature(temperature, covered):
+    case = regulated(EU, eu_index=0.5, liquid=replace(WATER, temperature=temperature))
+    verdict = judge(regulatory_efficiency.CHECK, case)[EU].verdict
+    assert verdict is (Verdict.PASS if covered else Verdict.NOT_APPLICABLE)
+
+
+def test_one_load_point_is_called_an_estimate():
+    case = regulated(EU, eu_index=0.5, eu_points=1)
+    assert "from best efficiency alone" in judge(regulatory_efficiency.CHECK, case)[EU].wording.message
