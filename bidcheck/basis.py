@@ -5,13 +5,17 @@ from dataclasses import replace
 from bidcheck.bid import Bid
 from bidcheck.curve import Curve, Fit, Fits, Points
 from bidcheck.errors import OutOfRange
-from bidcheck.fit import fit_curve
+from bidcheck.fit import derived_points, fit_curve
 from bidcheck.hydraulics.viscous import needs_correction, viscous_factors, viscous_head_factor, viscous_parameter
 from bidcheck.inquiry import Liquid
 from bidcheck.quantity import Assumption
 
 NPSH3_UP, NPSH3_DOWN = 2.0, 1.3
 """Exponents of speed for NPSH3, the careful one either way. Source: ISO 9906:2012 lets 1.3 to 2 (from memory)."""
+
+
+LIKELY_BEST = 0.75
+"""Share of the last flow of a curve near which best efficiency is likely. Source: common practice, no source."""
 
 
 def scaled(points: Points | None, flow: float = 1.0, value: float = 1.0) -> Points | None:
@@ -76,11 +80,21 @@ def at_offered_basis(curve: Curve, bid: Bid, assumptions: list[Assumption]) -> C
 
 
 def viscosity_matters(liquid: Liquid, bid: Bid, fits: Fits) -> bool:
-    """Whether viscosity changes what the pump does: B of ANSI/HI 9.6.7 above 1 and no cold water."""
-    bep = fits.bep
-    if bep is None or bep.head is None or bep.head <= 0:
+    """Whether viscosity changes what the pump does: B of ANSI/HI 9.6.7 above 1 and no cold water.
+
+    Where the points show no best efficiency, a flow where it is likely stands in.
+    """
+    bep, curve = fits.bep, fits.head
+    if bep is not None:
+        flow, head = bep.flow, bep.head
+    elif curve is not None:
+        flow = LIKELY_BEST * curve.domain[1]
+        head = curve.at(flow) if curve.covers(flow) else None
+    else:
         return False
-    B = viscous_parameter(liquid.viscosity, bep.flow, bep.head / bid.stages, bid.speed_rpm)
+    if head is None or head <= 0 or flow <= 0:
+        return False
+    B = viscous_parameter(liquid.viscosity, flow, head / bid.stages, bid.speed_rpm)
     return needs_correction(liquid.viscosity, B)
 
 
@@ -111,10 +125,15 @@ def _scaled_fit(fit: Fit, factor: float) -> Fit:
 
 def _viscous_fits(curve: Curve, fits: Fits, liquid: Liquid, bid: Bid, assumptions: list[Assumption]) -> Fits | None:
     """Fits of the water curve corrected for viscosity; None outside the limits of the correction."""
-    bep, head, efficiency = fits.bep, curve.head, curve.efficiency
+    bep, head, efficiency, what = fits.bep, curve.head, curve.efficiency, f"{curve.file}: as pumped"
+    if efficiency is None and head is not None and curve.power is not None:
+        efficiency = derived_points(head, curve.power, curve.density)
     if bep is None or bep.head is None or head is None or efficiency is None:
+        why = (
+            "the viscosity correction starts from head and efficiency at best efficiency, which the points do not show"
+        )
+        assumptions.append(Assumption(what, "not known", why))
         return None
-    what = f"{curve.file}: as pumped"
     try:
         factors = viscous_factors(liquid.viscosity, bep.flow, bep.head / bid.stages, bid.speed_rpm)
     except OutOfRange as error:

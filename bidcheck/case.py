@@ -58,3 +58,14 @@ class Case:
     bids: "tuple[Case, ...]" = ()
     """Every bid of the inquiry prepared alike, this one included, for comparisons between bids; one tuple shared by
     all cases. Empty where a bid is looked at alone."""
+
+    @property
+    def brought_from_water(self) -> bool:
+        """Whether `pumped` is the bidder's water curve corrected for viscosity here, not a curve of the bidder's."""
+        return self.pumped is not None and self.fits is not None and self.pumped.head is not self.fits.head
+
+    @property
+    def derived_efficiency(self) -> bool:
+        """Whether the efficiency judged follows from head and power, because the bid states none."""
+        fit = self.max_fits.efficiency if self.max_fits is not None else None
+        return fit is not None and fit.derived and not self.estimates.declared

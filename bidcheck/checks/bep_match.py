@@ -8,7 +8,7 @@ the limit lies inside the uncertainty of the fitted best efficiency flow, the fi
 from collections.abc import Iterator
 
 from bidcheck.case import Case
-from bidcheck.checks.evidence import flow, text, whole_share
+from bidcheck.checks.evidence import flow, text, whole_share, whose_curve
 from bidcheck.checks.request import asked, asked_for_curve
 from bidcheck.checks.verdicts import missed
 from bidcheck.curve import BestEfficiency
@@ -24,6 +24,7 @@ def run(case: Case) -> Iterator[Measured]:
         compared = within(rated / bep.flow, limit)
         unsure = not compared.holds and any(within(rated / q, limit).holds for q in bep.flow_interval or () if q > 0.0)
         evidence = {"rated_flow": flow(rated), "bep_flow": flow(bep.flow), "ratio": whole_share(rated / bep.flow)}
+        evidence |= whose_curve(case)
         if unsure:
             evidence |= _interval(bep, case)
             yield Measured(
@@ -71,7 +72,7 @@ CHECK = Check(
     wordings={
         "": Wording(
             "Rated flow {rated_flow} is {ratio} of best efficiency flow {bep_flow} at the offered diameter.",
-            "At the offered diameter your points put best efficiency at {bep_flow}, so rated flow {rated_flow} is"
+            "At the offered diameter {yours} puts best efficiency at {bep_flow}, so rated flow {rated_flow} is"
             " {ratio} of it. Please offer a selection within {limit} of it, or show by operating data why this one"
             " will run well.",
         ),

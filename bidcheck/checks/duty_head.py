@@ -8,7 +8,7 @@ so low that it must be on another basis, per stage or in another unit, is asked 
 from collections.abc import Iterator
 
 from bidcheck.case import Case
-from bidcheck.checks.evidence import flow, head, share, text
+from bidcheck.checks.evidence import flow, head, share, text, whose_curve
 from bidcheck.checks.request import asked
 from bidcheck.explain import UNIT_MISTAKES, in_words, possible, stage_mistakes
 from bidcheck.finding import Check, Measured, Verdict, Wording
@@ -41,7 +41,14 @@ def run(case: Case) -> Iterator[Measured]:
         "rated_head": head(duty.rated_head),
         "rated_flow": flow(duty.rated_flow),
         "ratio": share(ratio),
-    }
+    } | whose_curve(case)
+    if (
+        case.brought_from_water
+        and "head" not in at.from_claims
+        and case.fits is not None
+        and case.fits.head is not None
+    ):
+        evidence["in_water"] = head(case.fits.head.at(duty.rated_flow))
     causes = () if floor.holds or ratio > OTHER_BASIS else _other_bases(case, ratio)
     if causes:
         evidence["causes"] = text(in_words(causes))
@@ -57,7 +64,7 @@ def run(case: Case) -> Iterator[Measured]:
         subject="rated",
         holds=asked_for if floor.holds else floor,
         evidence=evidence,
-        wording="claimed" if "head" in at.from_claims else "",
+        wording="claimed" if "head" in at.from_claims else ("viscous" if "in_water" in evidence else ""),
     )
 
 
@@ -82,13 +89,20 @@ CHECK = Check(
     wordings={
         "": Wording(
             "Head at rated flow {rated_flow} is {head}, {ratio} of the rated head {rated_head}.",
-            "Your curve gives {head} at {rated_flow}; {rated_head} are asked for. Please offer a diameter that meets"
+            "{yours} gives {head} at {rated_flow}; {rated_head} are asked for. Please offer a diameter that meets"
             " the duty.",
+        ),
+        "viscous": Wording(
+            "Head at rated flow {rated_flow} is {head}, {ratio} of the rated head {rated_head}: the bidder's water"
+            " curve ({in_water} there), corrected for viscosity by ANSI/HI 9.6.7.",
+            "Your water curve gives {in_water} at {rated_flow}; brought to the liquid's viscosity by ANSI/HI 9.6.7 that"
+            " is {head}, and {rated_head} are asked for. Please send your own curve for the liquid, and offer a"
+            " diameter that meets the duty.",
         ),
         "explained": Wording(
             "Head at rated flow {rated_flow} is {head}, {ratio} of the rated head {rated_head}. It would be explained"
             " if {causes}.",
-            "Your curve gives {head} at {rated_flow}; {rated_head} are asked for. It looks as if {causes}. Please"
+            "{yours} gives {head} at {rated_flow}; {rated_head} are asked for. It looks as if {causes}. Please"
             " confirm and correct.",
         ),
         "claimed": Wording(

@@ -19,6 +19,7 @@ figures.
 from collections.abc import Iterator
 
 from bidcheck.case import Case
+from bidcheck.checks.derived_efficiency import mistakes_behind
 from bidcheck.checks.evidence import points, share, specific_speed, text, whose_words
 from bidcheck.checks.motor_losses import losses_that_explain
 from bidcheck.checks.request import asked, not_applicable
@@ -97,9 +98,12 @@ def _placed(case: Case, estimate: EfficiencyEstimate, claim: float) -> Measured:
     if low is not None and (causes := losses_that_explain(case, estimate, claim)):
         evidence["causes"] = text(in_words(causes))
         wording = f"{wording}, explained"
-    if wording == "above attainable" and "market_below" not in evidence and estimate.expected is not None:
+    if high is not None and verdict is Verdict.QUERY and (causes := mistakes_behind(case)):
+        evidence["causes"] = text(in_words(causes))
+        wording = "high, explained"
+    elif wording == "above attainable" and "market_below" not in evidence and estimate.expected is not None:
         wording = "above attainable, not surveyed"
-    if estimate.expected is None:
+    if estimate.expected is None and wording != "high, explained":
         wording = f"{wording}, no expected value".removeprefix(", ")
     if case.estimates.corrected and verdict is Verdict.QUERY:
         verdict = Verdict.REMARK
@@ -224,6 +228,12 @@ CHECK = Check(
         "low": Wording(
             f"{{what}} {{claim}} is low for this size and specific speed: {MIDDLE}, about the worst tenth of the"
             " surveyed market."
+        ),
+        "high, explained": Wording(
+            "{what} {claim} is more than pumps of this size and specific speed show. It would be explained if"
+            " {causes}.",
+            "{you} {claim}, more than pumps of this size and specific speed show. It looks as if {causes}. Please"
+            " confirm and correct.",
         ),
         "low, explained": Wording(
             f"{{what}} {{claim}} is low for this size and specific speed: {MIDDLE}, about the worst tenth of the"

@@ -93,7 +93,17 @@ def whose_words(case: "Case") -> dict[str, Evidence]:
         "rated flow": ("efficiency claimed at rated flow", "You claim at rated flow"),
     }
     what, you = words[case.estimates.declared]
+    if case.derived_efficiency:
+        what, you = "best efficiency that follows from flow, head and power,", "Your flow, head and power give"
     return {"what": text(what), "you": text(you)}
+
+
+def whose_curve(case: "Case") -> dict[str, Evidence]:
+    """How to speak of the curve as pumped, to the reader and to the bidder: it may be corrected for viscosity here."""
+    if not case.brought_from_water:
+        return {"whose": text("the bidder's own curve"), "yours": text("your curve")}
+    brought = "brought to the liquid's viscosity by ANSI/HI 9.6.7,"
+    return {"whose": text(f"the bidder's water curve, {brought}"), "yours": text(f"your water curve, {brought}")}
 
 
 def of_column(value: float, column: Column) -> Evidence:

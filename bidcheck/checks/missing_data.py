@@ -20,6 +20,8 @@ def run(case: Case) -> Iterator[Measured]:
         yield asked_for_curve(case, "head curve", decisive=True)
     else:
         yield Measured(subject="head curve", verdict=Verdict.PASS)
+    if case.brought_from_water:
+        yield asked("curve as pumped", "curve for the liquid as pumped")
     efficiency_or_power = at.efficiency is not None or at.power is not None
     yield from _need("efficiency or power", "efficiency or power", efficiency_or_power, decisive=True)
     yield from _need("NPSH3", "NPSH3 at rated flow", at.npsh3 is not None and at.npsh3 > 0.0, decisive=True)

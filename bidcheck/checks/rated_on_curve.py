@@ -8,7 +8,7 @@ printed digits, the fit and 2 %.
 from collections.abc import Iterator
 
 from bidcheck.case import Case
-from bidcheck.checks.evidence import of_column, share, text
+from bidcheck.checks.evidence import of_column, share, text, whose_curve
 from bidcheck.checks.request import not_applicable
 from bidcheck.checks.verdicts import missed
 from bidcheck.curve import COLUMN_WORDS, COLUMNS, Column, Fit
@@ -59,7 +59,7 @@ def _compared(
         "claim": of_column(claim.value, column),
         "curve": of_column(curve, column),
         "gap": share(abs(gap - 1)),
-    }
+    } | whose_curve(case)
     compared = within(abs(gap - 1.0), limit, slack=slack)
     if compared.holds:
         return Measured(subject=subject, holds=compared, evidence=evidence)
@@ -131,23 +131,21 @@ CHECK = Check(
     limits=("claim_on_curve",),
     source="common practice, no source; tolerance from printed digits and fit",
     wordings={
-        "": Wording("Claimed {quantity} {claim} lies on the bidder's curve ({curve}, off by {gap})."),
+        "": Wording("Claimed {quantity} {claim} lies on {whose} ({curve}, off by {gap})."),
         "better": Wording(
-            "Claimed {quantity} {claim} is better than the bidder's own curve gives, {curve}: off by {gap}.",
-            "You claim {quantity} {claim} where your curve gives {curve}. Which of the two is guaranteed? Please"
+            "Claimed {quantity} {claim} is better than {whose} gives, {curve}: off by {gap}.",
+            "You claim {quantity} {claim} where {yours} gives {curve}. Which of the two is guaranteed? Please"
             " correct the other.",
         ),
-        "careful": Wording(
-            "Claimed {quantity} {claim} is more careful than the bidder's own curve, {curve}: off by {gap}."
-        ),
+        "careful": Wording("Claimed {quantity} {claim} is more careful than {whose}, {curve}: off by {gap}."),
         "speed drawn": Wording(
             "Claimed {quantity} {claim} belongs to the speed the curve was drawn for; at the offered speed the curve"
             " gives {curve}."
         ),
         "explained": Wording(
-            "Claimed {quantity} {claim} is off the bidder's own curve, {curve}, by {gap}. One mistake would close the"
+            "Claimed {quantity} {claim} is off {whose}, {curve}, by {gap}. One mistake would close the"
             " gap: {mistakes}.",
-            "You claim {quantity} {claim} where your curve gives {curve}. It looks as if {mistakes}. Please"
+            "You claim {quantity} {claim} where {yours} gives {curve}. It looks as if {mistakes}. Please"
             " confirm and correct.",
         ),
     },

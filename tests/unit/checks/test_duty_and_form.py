@@ -3,9 +3,12 @@ from dataclasses import replace
 import pytest
 
 from bidcheck.bid import Claims
-from bidcheck.checks import curve_stability, duty_head, flow_range, specific_speed_window
+from bidcheck.case import Case
+from bidcheck.checks import curve_stability, duty_head, flow_range, missing_data, specific_speed_window
 from bidcheck.finding import Verdict
-from bidcheck.inquiry import Duty
+from bidcheck.inquiry import Duty, Liquid
+from bidcheck.quantity import UnitSystem
+from bidcheck.report.words import question
 from tests.build import M3H, points, sound_curve, stated
 from tests.unit.checks.judge import judge, sound_case
 
@@ -121,3 +124,42 @@ def test_a_head_on_another_basis_is_asked_about_not_failed(factor, stages, verdi
     finding = judge(duty_head.CHECK, sound_case(bid))["rated"]
     assert finding.verdict is verdict
     assert ("causes" in finding.evidence) is (verdict is Verdict.QUERY)
+
+
+def thick(**curve: object) -> Case:
+    """A small pump whose water curve is brought to a viscous liquid."""
+    base = sound_curve(**curve)
+    small = {
+        column: replace(one, flow=one.flow * 0.3)
+        for column in ("head", "efficiency", "power", "npsh3")
+        if (one := base.points(column)) is not None  # type: ignore[arg-type]
+    }
+    oil = Liquid(name="oil", density=880.0, viscosity=120e-6)
+    asked = Duty(rated_flow=130 * M3H, rated_head=62.0)
+    return sound_case({"curves": (replace(base, **small),), "claims": Claims()}, liquid=oil, duty=asked)
+
+
+def test_a_head_corrected_for_viscosity_is_not_called_the_bidders_curve():
+    case = thick(power=None)
+    assert case.brought_from_water
+    finding = judge(duty_head.CHECK, case)["rated"]
+    assert finding.verdict in (Verdict.QUERY, Verdict.FAIL)
+    assert float(finding.evidence["in_water"].value) > float(finding.evidence["head"].value)
+    assert question(finding, UnitSystem.SI).startswith("Your water curve gives")
+    assert judge(missing_data.CHECK, case)["curve as pumped"].verdict is Verdict.NO_DATA
+    assert not sound_case().brought_from_water
+    assert "curve as pumped" not in judge(missing_data.CHECK, sound_case())
+
+
+def test_power_alone_is_enough_for_the_correction():
+    case = thick(efficiency=None)
+    assert case.pumped is not None
+    assert case.at_duty.head is not None
+
+
+def test_a_head_curve_alone_is_not_taken_for_one_of_a_viscous_liquid():
+    case = thick(efficiency=None, power=None)
+    assert case.pumped is None
+    assert any("the points do not show" in item.why for item in case.assumptions)
+    assert judge(duty_head.CHECK, case)["rated"].verdict is Verdict.NO_DATA
+    assert judge(curve_stability.CHECK, case)["towards shutoff"].verdict is Verdict.NO_DATA

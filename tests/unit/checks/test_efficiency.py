@@ -227,3 +227,14 @@ def test_a_claim_at_rated_flow_is_judged_on_the_high_side_only():
     assert message(low, UnitSystem.SI).startswith("Efficiency claimed at rated flow 60.0 %")
     nothing = judge(efficiency_claim.CHECK, declared())
     assert nothing["best efficiency"].verdict is Verdict.NO_DATA
+
+
+def test_an_efficiency_that_follows_from_power_is_not_called_a_claim():
+    curve = sound_curve(efficiency=None)
+    assert curve.power is not None
+    less = replace(curve, power=replace(curve.power, value=curve.power.value * 0.92))
+    case = sound_case({"curves": (less,), "claims": Claims()})
+    finding = judge(efficiency_claim.CHECK, case)["best efficiency"]
+    assert finding.verdict is Verdict.QUERY
+    assert message(finding, UnitSystem.SI).startswith("Best efficiency that follows from flow, head and power,")
+    assert question(finding, UnitSystem.SI).startswith("Your flow, head and power give")
