@@ -229,7 +229,9 @@ def _estimates(bid: Bid, curve: Curve | None, fits: Fits | None, best: Best, nps
         ),
         shape=shape,
         suction=_suction(bid, of_points, best, npsh3),
-        regulation=_regulation(bid, nq_eye, best, shape, of_points.head if of_points is not None else None),
+        regulation=None
+        if best.declared == "rated flow"
+        else _regulation(bid, nq_eye, best, shape, of_points.head if of_points is not None else None),
     )
 
 
@@ -351,7 +353,12 @@ def _us(
     nominal = us_nominal_speed(bid.speed_rpm)
     flow = flow_at_speed(best.flow, bid.speed_rpm, nominal)
     outside = outside_us_scope(
-        us_class, nq=nq, flow=flow, head=head_at_speed(best.head, bid.speed_rpm, nominal) * bid.stages
+        us_class,
+        nq=nq,
+        flow=flow,
+        head=head_at_speed(best.head, bid.speed_rpm, nominal) * bid.stages,
+        power=shaft_power(TEST_DENSITY, best.flow, best.head * bid.stages, best.efficiency),
+        speed_rpm=bid.speed_rpm,
     )
     if outside:
         return us_class, None, f"{outside} at {nominal} 1/min"

@@ -44,7 +44,7 @@ def run(case: Case) -> Iterator[Measured]:
     evidence |= whose_words(case)
     evidence |= {name.replace(" ", "_"): share(loss) for name, loss in estimate.ceiling_terms.items()}
     compared = within(claim, limit, slack=doubt)
-    causes = () if compared.holds else (*likely_causes(case), *mistakes_behind(case))
+    causes = () if compared.holds else (*likely_causes(case, claim - doubt), *mistakes_behind(case))
     if causes:
         evidence["causes"] = text(in_words(causes))
         yield Measured(

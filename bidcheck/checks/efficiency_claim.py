@@ -91,11 +91,13 @@ def _limit(name: str, at_least: float | None, at_most: float | None, origin: str
 def _placed(case: Case, estimate: EfficiencyEstimate, claim: float) -> Measured:
     """The first step of the ladder that the claim stands on, from the top."""
     high = _above(estimate, claim, _doubt(case))
+    if high is None and case.estimates.declared == "rated flow" and _below(estimate, claim, 0.0) is not None:
+        return asked("best efficiency", "best efficiency")
     low = _below(estimate, claim, case.estimates.trim_allowance) if high is None else None
     step = high or low
     wording, verdict, limit = step if step is not None else ("", Verdict.PASS, _band(estimate))
     evidence = _evidence(case, estimate, claim)
-    if low is not None and (causes := losses_that_explain(case, estimate, claim)):
+    if low is not None and (causes := losses_that_explain(case, estimate, claim) or mistakes_behind(case)):
         evidence["causes"] = text(in_words(causes))
         wording = f"{wording}, explained"
     if high is not None and verdict is Verdict.QUERY and (causes := mistakes_behind(case)):

@@ -2,13 +2,14 @@
 
 Each bid on the duty lies some points above or below the efficiency expected of its own size, speed and arrangement. An
 error all estimates share moves all bids alike, so a bid far above the middle of the others stands out even where the
-estimate itself is doubtful. At least three comparable bids are needed; the middle is the median of the others. Small
+estimate itself is doubtful. At least three comparable bids are needed; the middle is the
+median of the others, the higher of two, so that one wild bid among three drags nobody into question. Small
 numbers decide little: a lone outlier is a remark, and a question only where the claim is also above what is expected by
 more than the error of the estimate. Where efficiency-claim already asks for a test, it is not asked for twice.
 """
 
 from collections.abc import Iterator
-from statistics import median
+from statistics import median_high
 
 from bidcheck.case import Case
 from bidcheck.checks.evidence import count, points, share
@@ -50,7 +51,7 @@ def _placed(case: Case, own: float, others: list[float]) -> Measured:
     assert estimate is not None
     assert estimate.expected is not None
     assert claim is not None
-    middle = median(others)
+    middle = median_high(others)
     limit = case.inquiry.limits.efficiency_peers
     compared = within(own - middle, limit)
     evidence = {
@@ -81,7 +82,7 @@ CHECK = Check(
     run=run,
     otherwise=Verdict.REMARK,
     limits=("efficiency_peers",),
-    source="derived: median of the other bids' distances from their own independent expectations",
+    source="derived: upper median of the other bids' distances from their own independent expectations",
     wordings={
         "": Wording(
             "Best efficiency {claim} is {distance} from its own expectation, {expected}; the middle of {bids} other"

@@ -15,6 +15,7 @@ from bidcheck.checks.impeller_causes import figures_of, likely_causes
 from bidcheck.checks.request import asked, asked_in_water, not_applicable
 from bidcheck.checks.unlike import at_most_remark
 from bidcheck.checks.verdicts import missed
+from bidcheck.estimates.head_coefficient import LOWEST_NQ
 from bidcheck.explain import in_words
 from bidcheck.finding import Check, Evidence, Measured, Verdict, Wording
 from bidcheck.limits import within
@@ -42,7 +43,9 @@ def _placed(case: Case, impeller: ImpellerEstimate, found: float) -> Measured:
     """The coefficient against what is plausible, and the mistake that would explain it."""
     limits, evidence = case.inquiry.limits, _evidence(case, impeller, found)
     compared, far = within(found, limits.head_coefficient), within(found, limits.head_coefficient_far)
-    if impeller.expected is None and far.holds:
+    narrow = case.estimates.nq_eye is not None and case.estimates.nq_eye < LOWEST_NQ
+    judged = found > EXTREME[1] or (narrow and found < EXTREME[0])
+    if impeller.expected is None and not judged:
         reason = next(source.reason for source in impeller.sources if source.value is None)
         return not_applicable("best efficiency", reason)
     if compared.holds:

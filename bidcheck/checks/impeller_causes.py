@@ -4,8 +4,10 @@ from collections.abc import Iterator
 from dataclasses import dataclass, replace
 
 from bidcheck.case import Case
+from bidcheck.errors import OutOfRange
 from bidcheck.estimates.expected import MULTISTAGE
 from bidcheck.estimates.head_coefficient import HIGHEST_NQ, LOWEST_NQ, head_coefficient, optimum_head_coefficient
+from bidcheck.estimates.loss_ceiling import loss_ceiling
 from bidcheck.explain import CONVERTED, UNIT_MISTAKES, Quantity, possible
 from bidcheck.hydraulics.driver import synchronous_speed
 from bidcheck.hydraulics.specific_speed import specific_speed
@@ -18,6 +20,9 @@ MOST_NAMED = 3
 """More would explain nothing."""
 MOST_STAGES = 16
 """Stages looked at. Source: common practice, no source; offers with more are rare."""
+STAGES_BEYOND = (0.75, 1.3)
+"""Head coefficient over the expected one, outside which another number of stages is thought of. Source: common
+practice, no source."""
 ABOUT = (0.75, 1.4)
 """Head offered over head asked for within which a curve is taken to be in the units it says. Source: common practice,
 no source."""
@@ -41,13 +46,30 @@ class Figures:
         nq = min(max(specific_speed(self.speed_rpm, self.flow, head), LOWEST_NQ), HIGHEST_NQ)
         return head_coefficient(head, self.speed_rpm, self.diameter) / optimum_head_coefficient(nq)
 
+    def ceiling(self, eyes: int) -> float:
+        """Efficiency the losses leave, with clean cold water; 0 outside its range."""
+        head = self.head / self.stages
+        try:
+            found = loss_ceiling(
+                nq=specific_speed(self.speed_rpm, self.flow, head),
+                flow=self.flow * eyes,
+                head_per_stage=head,
+                speed_rpm=self.speed_rpm,
+                diameter=self.diameter,
+                viscosity=1.0e-6,
+                density=998.2,
+            )
+        except OutOfRange:
+            return 0.0
+        return found.efficiency
 
-def likely_causes(case: Case) -> tuple[str, ...]:
+
+def likely_causes(case: Case, leaving: float | None = None) -> tuple[str, ...]:
     """Words of every single mistake that brings the head coefficient near what is expected, the nearest first.
 
     Empty where the bid states no diameter, the coefficient is plausible as it stands, or nothing would do. Flow and
     head in other units are looked at only where the curve misses the duty: a curve that meets it is in the units it
-    says.
+    says. With `leaving`, only those under which the losses would leave that efficiency.
     """
     figures = figures_of(case)
     if figures is None or within(figures.ratio(), case.inquiry.limits.head_coefficient).holds:
@@ -55,7 +77,11 @@ def likely_causes(case: Case) -> tuple[str, ...]:
     found: list[tuple[float, str]] = []
     kinds = [_units(figures, case), _other_speeds(figures, case), _other_stages(figures, case)]
     for kind in kinds:
-        near = [(abs(meant.ratio() - 1.0), words) for words, meant in kind]
+        near = [
+            (abs(meant.ratio() - 1.0), words)
+            for words, meant in kind
+            if leaving is None or meant.ceiling(case.bid.suction_eyes) >= leaving
+        ]
         found += [item for item in near if item[0] <= CLOSE]
     return tuple(words for _, words in sorted(found)[:MOST_NAMED])
 
@@ -95,14 +121,13 @@ def _meets_duty(case: Case) -> bool:
 
 def _other_speeds(figures: Figures, case: Case) -> Iterator[tuple[str, Figures]]:
     """The curve belongs to another ordinary motor speed at the same slip, or is at the offered speed already."""
-    speeds = [
-        (synchronous_speed(f, poles), f"{f:.0f} Hz, {poles} poles") for f in (50.0, 60.0) for poles in (2, 4, 6, 8)
-    ]
-    own, _ = min(speeds, key=lambda item: abs(item[0] / figures.speed_rpm - 1.0))
-    for speed, words in speeds:
-        if speed != own:
-            meant = figures.speed_rpm * speed / own
-            yield f"the curve belongs to about {meant:.0f} 1/min ({words})", replace(figures, speed_rpm=meant)
+    ordinary = [(f, poles) for f in (50.0, 60.0) for poles in (2, 4, 6, 8)]
+    own = min(ordinary, key=lambda one: abs(synchronous_speed(*one) / figures.speed_rpm - 1.0))
+    for frequency, poles in ordinary:
+        if (frequency, poles) != own and (frequency == own[0] or poles == own[1]):
+            meant = figures.speed_rpm * synchronous_speed(frequency, poles) / synchronous_speed(*own)
+            words = f"the curve belongs to about {meant:.0f} 1/min ({frequency:.0f} Hz, {poles} poles)"
+            yield words, replace(figures, speed_rpm=meant)
     drawn = {curve.speed_rpm for curve in case.bid.curves if case.max_curve and curve.file == case.max_curve.file}
     for speed in drawn:
         ratio = figures.speed_rpm / speed
@@ -115,6 +140,8 @@ def _other_stages(figures: Figures, case: Case) -> Iterator[tuple[str, Figures]]
     """The number of stages that suits head, diameter and speed best, where the bid is of a kind that has several."""
     if case.bid.stages == 1 and case.bid.arrangement not in (*MULTISTAGE, "vertical turbine"):
         return
+    if STAGES_BEYOND[0] < figures.ratio() < STAGES_BEYOND[1]:
+        return  # a stage more or less among several would explain any honest impeller
     others = [replace(figures, stages=count) for count in range(1, MOST_STAGES + 1) if count != figures.stages]
     best = min(others, key=lambda meant: abs(meant.ratio() - 1.0))
     count = "one stage" if best.stages == 1 else f"{best.stages} stages"

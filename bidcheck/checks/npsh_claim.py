@@ -21,6 +21,10 @@ from bidcheck.limits import within
 from bidcheck.quantity import unit_of
 from bidcheck.second_opinion import SuctionEstimate
 
+RATED_DOUBT = 0.2
+"""Relative doubt of a suction specific speed taken at rated flow, near best efficiency: NPSH3 goes with flow to the
+power 1 to 2. Source: common practice, no source."""
+
 
 def run(case: Case) -> Iterator[Measured]:
     """Place the suction specific speed that the claim implies."""
@@ -45,7 +49,8 @@ def _placed(case: Case, suction: SuctionEstimate, offered: float, nss: float) ->
         "ordinary_from": npsh(suction.low),
         "ordinary_to": npsh(suction.high),
     }
-    high, low = within(nss, limits.nss_credible), within(nss, limits.nss_sound)
+    doubt = RATED_DOUBT * nss if at_rated else 0.0
+    high, low = within(nss, limits.nss_credible, slack=doubt), within(nss, limits.nss_sound, slack=doubt)
     if high.holds and low.holds:
         band = LOWEST_NSS <= nss <= HIGHEST_NSS
         return Measured(subject="best efficiency", holds=high, evidence=evidence, wording="" if band else "between")

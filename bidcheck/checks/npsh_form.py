@@ -21,6 +21,8 @@ from bidcheck.limits import within
 
 FROM = 0.6
 """Share of best efficiency flow from which NPSH3 must not fall. Source: common practice, no source."""
+BEYOND = 1.15
+"""Share of best efficiency flow the points must reach for growth to be told. Source: common practice, no source."""
 LEAST_POINTS = 3
 """Points above that share needed to speak of a fall. Source: common practice, no source."""
 
@@ -68,17 +70,18 @@ def _fall(case: Case, points: Points, keep: "np.typing.NDArray[np.bool_]") -> Me
 
 
 def _growth(case: Case, points: Points) -> Measured:
-    """Exponent of growth beyond best efficiency, against one that stays flat."""
-    suction = case.estimates.suction
-    growth = suction.growth if suction is not None else None
-    fits = case.max_fits
-    if growth is None or fits is None or fits.bep is None:
+    """Exponent of growth beyond best efficiency at the rated diameter, against one that stays flat."""
+    fits = case.fits
+    if fits is None or fits.bep is None or fits.npsh3 is None or not fits.npsh3.covers(fits.bep.flow):
+        return not_applicable("growth", "the points of NPSH3 do not reach best efficiency flow")
+    best, last = fits.bep.flow, fits.npsh3.domain[1]
+    start, end = fits.npsh3.at(best), fits.npsh3.at(last)
+    if last < BEYOND * best or start <= 0 or end <= 0:
         return not_applicable("growth", "the points of NPSH3 do not reach 15 % beyond best efficiency flow")
-    limit = case.inquiry.limits.npsh_growth
-    last = float(points.value[-1])
-    width = float(np.log(points.flow[-1] / fits.bep.flow)) if points.flow[-1] > fits.bep.flow else 0.0
-    slack = 2.0 * float(points.value_half_digit[-1]) / last / width if last > 0 and width > 0 else 0.0
-    compared = within(growth, limit, slack=slack)
+    width = float(np.log(last / best))
+    growth = float(np.log(end / start)) / width
+    slack = 2.0 * float(points.value_half_digit[-1]) / end / width
+    compared = within(growth, case.inquiry.limits.npsh_growth, slack=slack)
     wording = "growth" if compared.holds else "flat"
     return Measured(subject="growth", holds=compared, evidence={"exponent": ratio(growth)}, wording=wording)
 
@@ -91,7 +94,7 @@ CHECK = Check(
     limits=("npsh_fall", "npsh_growth"),
     source="common practice, no source",
     wordings={
-        "": Wording("NPSH3 does not fall with rising flow above 60 % of best efficiency flow beyond {fall}."),
+        "": Wording("NPSH3 rises with flow above 60 % of best efficiency flow; the greatest fall is {fall}."),
         "falls": Wording(
             "NPSH3 falls with rising flow, from {high} at {at_high} to {low} at {at_low}: pumps do not show that above"
             " 60 % of best efficiency flow.",
@@ -100,8 +103,8 @@ CHECK = Check(
         ),
         "growth": Wording("Beyond best efficiency NPSH3 rises with flow to the power {exponent}."),
         "flat": Wording(
-            "Beyond best efficiency NPSH3 hardly rises (with flow to the power {exponent}): it looks drawn rather than"
-            " tested, and the margin at the largest flow rests on it.",
+            "Beyond best efficiency NPSH3 hardly rises, or falls (it goes with flow to the power {exponent}): it looks"
+            " drawn rather than tested, and the margin at the largest flow rests on it.",
             "Your NPSH3 hardly rises beyond best efficiency. Please send the NPSH test behind it.",
         ),
     },

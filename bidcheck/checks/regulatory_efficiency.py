@@ -8,6 +8,7 @@ allowed is a remark. A curve is not a type test: the bidder states the index, th
 falls short.
 """
 
+import re
 from collections.abc import Iterator
 
 from bidcheck.case import Case
@@ -22,6 +23,10 @@ COLDEST, HOTTEST = 263.15, 393.15
 """Water from −10 to 120 °C [K]. Source: Regulation (EU) No 547/2012, Article 2."""
 STEEPEST = 0.4
 """Greatest slope of the normal distribution, per spread."""
+
+
+NOT_CLEAN = frozenset({"waste", "sewage", "sea", "salt", "storm", "foul", "dirty", "produced", "brine", "slurry"})
+"""Words beside "water" that mean it is not clean. Source: common practice, no source."""
 
 
 def run(case: Case) -> Iterator[Measured]:
@@ -40,7 +45,8 @@ def run(case: Case) -> Iterator[Measured]:
 def _other_liquid(case: Case) -> str:
     """Reason why the liquid is none the regulations cover; empty for clean water."""
     liquid = case.inquiry.liquid
-    if "water" not in liquid.name.lower() or liquid.solids:
+    words = set(re.findall(r"[a-z]+", liquid.name.lower()))
+    if "water" not in words or words & NOT_CLEAN or liquid.solids:
         return "the regulation covers pumps for clean water only"
     if liquid.temperature is not None and not COLDEST <= liquid.temperature <= HOTTEST:
         return "the regulation covers water from −10 to 120 °C only"
@@ -74,11 +80,7 @@ def _us(case: Case, found: RegulationEstimate) -> Measured:
     if found.us_ratio is None:
         return not_applicable(US, found.us_reason)
     evidence = {"class": text(found.us_class), "ratio": share(found.us_ratio), "basis": text(case.estimates.basis)}
-    best, interval = case.estimates.offered_efficiency, case.estimates.offered_interval or 0.0
-    doubt = (interval if interval < float("inf") else 0.0) + case.estimates.trim_allowance
-    compared = within(
-        found.us_ratio, case.inquiry.limits.us_power_ratio, slack=doubt / best if best is not None and best > 0 else 0.0
-    )
+    compared = within(found.us_ratio, case.inquiry.limits.us_power_ratio)
     return Measured(subject=US, holds=compared, evidence=evidence, wording="us")
 
 

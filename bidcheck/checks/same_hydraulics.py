@@ -73,7 +73,7 @@ def _judged(case: Case, match: Match) -> Measured:
     evidence = {"other": text(match.name), "deviation": share(match.deviation)}
     if match.ahead is not None:
         evidence["ahead"] = points(match.ahead)
-    if match.alike:
+    if match.alike and (match.same_npsh3 or match.same_diameter is not False):
         verdict = missed(limits.same_hydraulics, Verdict.REMARK)
         wording = "one pump" if match.same_diameter is not False else "one pump, other diameter"
         return _found(verdict, limits.same_hydraulics, evidence, wording)
@@ -107,7 +107,8 @@ def _match(case: Case, other: Case) -> Match | None:
     if best is None:
         return None
     deviation, ratio = best
-    npsh3 = _deviation(mine.npsh3, theirs.npsh3, ratio, ratio**2)
+    speed = case.bid.speed_rpm / other.bid.speed_rpm  # a trim leaves NPSH3 as it is
+    npsh3 = _deviation(mine.npsh3, theirs.npsh3, speed, speed**2)
     efficiency = _deviation(mine.efficiency, theirs.efficiency, ratio, 1.0, relative=False)
     same_npsh3 = npsh3 is not None and npsh3 <= SAME_NPSH3
     same_efficiency = efficiency is not None and efficiency <= SAME_EFFICIENCY

@@ -34,6 +34,9 @@ US_CLASS: Mapping[Arrangement, UsClass] = {
 }
 """Class of the rule by arrangement. Source: 10 CFR 431.462, definitions."""
 
+HORSEPOWER = 745.7
+"""One horsepower [W]. Source: NIST SP 811."""
+
 M3S_PER_GPM = US_GALLON / 60.0
 """US gallon per minute [m³/s]. Derived from the definition of the US gallon."""
 
@@ -108,7 +111,15 @@ def us_minimum_efficiency(us_class: UsClass, nominal_rpm: int, nq: float, flow: 
     return (-0.85 * Q**2 - 0.38 * Ns * Q - 11.48 * Ns**2 + 17.80 * Q + 179.80 * Ns - (C + 555.6)) / 100.0
 
 
-def outside_us_scope(us_class: UsClass, *, nq: float, flow: float, head: float) -> str:
+def outside_us_scope(
+    us_class: UsClass,
+    *,
+    nq: float,
+    flow: float,
+    head: float,
+    power: float | None = None,
+    speed_rpm: float | None = None,
+) -> str:
     """Reason why the US rule does not cover a clean-water pump of this class; empty where it does.
 
     Parameters
@@ -119,6 +130,10 @@ def outside_us_scope(us_class: UsClass, *, nq: float, flow: float, head: float) 
         Specific speed. [1/min, m³/s, m per stage]
     flow, head : float
         Best efficiency point at nominal speed and full impeller. [m³/s, m]
+    power : float or None
+        Shaft power there. [W]
+    speed_rpm : float or None
+        Speed the pump is offered at. [1/min]
 
     Returns
     -------
@@ -127,7 +142,7 @@ def outside_us_scope(us_class: UsClass, *, nq: float, flow: float, head: float) 
 
     Notes
     -----
-    Source: 10 CFR 431.464: from 25 US gpm, to 459 ft, end suction to Ns 5000 US
+    Source: 10 CFR 431.464: from 25 US gpm, to 459 ft, end suction to Ns 5000 US; 1 to 200 hp and speeds from memory
     Valid for: the classes of `US_CONSTANTS`
     Mark: text
 
@@ -141,4 +156,10 @@ def outside_us_scope(us_class: UsClass, *, nq: float, flow: float, head: float) 
         "head is above 459 ft": head / FOOT > 459.0,
         "specific speed is above 5000 US": us_class in ("ESCC", "ESFM") and specific_speed_us(nq) > 5000.0,
     }
+    if power is not None:
+        reasons["shaft power is outside 1 to 200 hp"] = not HORSEPOWER <= power <= 200.0 * HORSEPOWER
+    if speed_rpm is not None:
+        reasons["speed is outside 1440 to 2160 and 2880 to 4320 1/min"] = not (
+            1440.0 <= speed_rpm <= 2160.0 or 2880.0 <= speed_rpm <= 4320.0
+        )
     return "; ".join(reason for reason, holds in reasons.items() if holds)

@@ -223,8 +223,11 @@ def test_a_claim_at_rated_flow_is_judged_on_the_high_side_only():
         Verdict.QUERY
     )
     low = judge(efficiency_claim.CHECK, declared(efficiency=stated(0.60, 0.0005)))["best efficiency"]
-    assert low.verdict is Verdict.PASS
-    assert message(low, UnitSystem.SI).startswith("Efficiency claimed at rated flow 60.0 %")
+    assert low.verdict is Verdict.NO_DATA
+    ordinary = judge(efficiency_claim.CHECK, declared(efficiency=stated(0.81, 0.0005)))["best efficiency"]
+    assert ordinary.verdict is Verdict.PASS
+    assert message(ordinary, UnitSystem.SI).startswith("Efficiency claimed at rated flow 81.0 %")
+    assert declared(efficiency=stated(0.81, 0.0005)).estimates.regulation is None
     nothing = judge(efficiency_claim.CHECK, declared())
     assert nothing["best efficiency"].verdict is Verdict.NO_DATA
 
