@@ -157,6 +157,8 @@ def _npsh3(best: Best, fits: Fits | None, rated: Fits | None, at_duty: AtFlow) -
         value = _value(one.npsh3, flow) if one is not None and flow is not None else None
         if value is not None and value > 0 and flow is not None:
             return Npsh3(value, flow, words)
+    if best.declared == "rated flow":
+        return None
     over = at_duty.flow_over_bep if at_duty.flow_over_bep is not None else at_duty.flow / best.flow
     if at_duty.npsh3 is not None and at_duty.npsh3 > 0 and NEAR[0] <= over <= NEAR[1]:
         return Npsh3(at_duty.npsh3, at_duty.flow, "NPSH3 at rated flow")

@@ -25,7 +25,24 @@ STEEPEST = 0.4
 """Greatest slope of the normal distribution, per spread."""
 
 
-NOT_CLEAN = frozenset({"waste", "sewage", "sea", "salt", "storm", "foul", "dirty", "produced", "brine", "slurry"})
+NOT_CLEAN = frozenset(
+    {
+        "waste",
+        "sewage",
+        "sea",
+        "salt",
+        "storm",
+        "foul",
+        "dirty",
+        "produced",
+        "brine",
+        "slurry",
+        "raw",
+        "glycol",
+        "sludge",
+        "sand",
+    }
+)
 """Words beside "water" that mean it is not clean. Source: common practice, no source."""
 
 
@@ -95,13 +112,13 @@ CHECK = Check(
         "eu": Wording(
             "Minimum efficiency index of the offered curve is about {index}, from {load_points} load points ({class};"
             " {basis}).",
-            "Your curve reads as a minimum efficiency index of about {index}; the regulation asks for 0.40. Please"
+            "Your curve reads as a minimum efficiency index of about {index}; the limit is {limit}. Please"
             " state the index of this pump at full diameter and the test behind it.",
         ),
         "eu, one point": Wording(
             "Minimum efficiency index is estimated at {index} from best efficiency alone ({class}; {basis}); the"
             " regulation looks at three load points.",
-            "Your best efficiency reads as a minimum efficiency index of about {index}; the regulation asks for 0.40."
+            "Your best efficiency reads as a minimum efficiency index of about {index}; the limit is {limit}."
             " Please state the index of this pump at full diameter and the test behind it.",
         ),
         "eu, near": Wording(
